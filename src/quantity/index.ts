@@ -1,0 +1,6 @@
+export { DIMENSIONS, unitsOf } from './dimensions';
+export type { Dimension } from './dimensions';
+export { convertTo, formatQuantity } from './format';
+export { editDistance, nearestName } from './nearest';
+export { parseQuantity } from './parse';
+export type { ParsedQuantity } from './parse';
