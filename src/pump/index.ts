@@ -1,0 +1,12 @@
+export { lineCrossSection } from './absorption';
+export type { AbsorptionModel, Polarisation, PumpLine } from './absorption';
+export { beamRadii, beamRadius } from './beam';
+export type { FocusedBeam } from './beam';
+export { caseWindow } from './case-window';
+export type { CaseWindow, CaseWindowInput } from './case-window';
+export { absorbedAt, channelsAt, prepareAbsorption, pumpChannels } from './channels';
+export type { PreparedAbsorption, PumpChannel } from './channels';
+export { absorbedShare, axialDeposit, unabsorbedShares } from './deposit';
+export { clippedShare, ringShares, shareWithin } from './profile';
+export type { BeamProfile } from './profile';
+export { diodeWavelength, spectralNodes } from './spectrum';
