@@ -100,7 +100,9 @@ export function caseWindow(input: CaseWindowInput): CaseWindow {
   const at = (k: number) => search.from + ((search.to - search.from) * k) / intervals;
   const samples = Float64Array.from({ length: intervals + 1 }, (_, k) => absorbed(at(k)));
   const top = samples.indexOf(Math.max(...samples));
-  const best = highest(absorbed, at(Math.max(0, top - 1)), at(Math.min(intervals, top + 1)));
+  const peak = highest(absorbed, at(Math.max(0, top - 1)), at(Math.min(intervals, top + 1)));
+  // At an end of the range the best is the end itself, which the search only nears.
+  const best = absorbed(peak) > samples[top]! ? peak : at(top);
   const bestShare = absorbed(best);
   const short = (t: number) => absorbed(t) - shareOfBest * bestShare;
   const bound = (direction: 1 | -1): number | null => {
