@@ -1,0 +1,10 @@
+export { boltzmannShare } from './boltzmann';
+export { fluorescenceFraction, heatFraction, quantumDefect } from './heat-fraction';
+export type { HeatFractionInput } from './heat-fraction';
+export { laserOutput } from './output';
+export type { LaserInput, LaserOutput } from './output';
+export { flatTopOverlap, gaussianOverlap, ringOverlap, slopeOverlapAtThreshold } from './overlap';
+export { combineRings, overlapFaces, pumpRings } from './pump-rings';
+export type { PumpRings } from './pump-rings';
+export { reabsorptionLoss, roundTripLoss, thresholdAbsorbedPower } from './threshold';
+export type { Reabsorption, ThresholdInput } from './threshold';
