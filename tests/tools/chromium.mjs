@@ -29,9 +29,10 @@ export function ensureChromium() {
   }
   const found = findChromium();
   if (found) return { path: found };
-  if (mayInstall() && install()) {
-    const installed = findChromium();
+  if (mayInstall()) {
+    const installed = install() && findChromium();
     if (installed) return { path: installed };
+    return { reason: 'The chromium package could not be installed; what apt-get printed above says why.' };
   }
   return {
     reason: `The browser tests need Chromium: ${advice()}, or set CHROMIUM to the path of its program.`,

@@ -101,13 +101,17 @@ describe('npm start when it cannot go on', () => {
     other.remove();
   });
 
-  test('a Node that is too old is named, with the one needed', async () => {
-    const older =
-      'Object.defineProperty(process, "versions", { value: { ...process.versions, node: "18.19.0" } })';
-    const { code, said } = await project.fail([], ['--import', `data:text/javascript,${older}`]);
-    expect(code).toBe(1);
-    expect(said).toMatch(/^This needs Node 20 or newer, but the Node started here is 18\.19\.0; .*\.\n$/);
-  });
+  test.each(['18.20.4', '20.18.3', '21.7.3', '22.12.0'])(
+    'Node %s is refused, naming the one needed',
+    async (version) => {
+      const older = `Object.defineProperty(process, "versions", { value: { ...process.versions, node: "${version}" } })`;
+      const { code, said } = await project.fail([], ['--import', `data:text/javascript,${older}`]);
+      expect(code).toBe(1);
+      expect(said).toContain(`This needs Node 20.19 or newer (of the 22 line, 22.13 or newer)`);
+      expect(said).toContain(`but the Node started here is ${version};`);
+      expect(said.trimEnd().split('\n')).toHaveLength(1);
+    },
+  );
 
   test.each([
     [['--port', 'eighty'], '--port needs a whole number from 0 (any free port) to 65535, not "eighty".\n'],

@@ -11,7 +11,8 @@ import { fileURLToPath } from 'node:url';
 /** Top folder of the project, wherever the command was started. */
 export const projectRoot = fileURLToPath(new URL('../..', import.meta.url));
 
-const lowestNode = 20;
+/** The bundler and the linter load on no earlier release of these lines; newer lines need nothing more. */
+const lowestMinor = { 20: 19, 22: 13 };
 /** What the built page depends on; a change in any of these makes `dist/` stale. */
 const buildInputs = ['web', 'src', 'workers', 'vite.config.ts', 'tsconfig.json', 'package-lock.json'];
 /** Lies inside `dist/`, so a build that empties the folder and then fails leaves none behind. */
@@ -27,9 +28,10 @@ export class SetUpError extends Error {
  * @throws {SetUpError} naming the version found and the one needed
  */
 export function requireNode() {
-  if (Number.parseInt(process.versions.node, 10) >= lowestNode) return;
+  const [major, minor] = process.versions.node.split('.').map(Number);
+  if (major > 22 || minor >= lowestMinor[major]) return;
   throw new SetUpError(
-    `This needs Node ${lowestNode} or newer, but the Node started here is ${process.versions.node}; install a newer one from nodejs.org or your system's packages.`,
+    `This needs Node 20.19 or newer (of the 22 line, 22.13 or newer), but the Node started here is ${process.versions.node}; install a newer one from nodejs.org or your system's packages.`,
   );
 }
 
