@@ -72,6 +72,7 @@ async function unit(words) {
   rmSync(report, { force: true });
   const { code } = await runProgram('vitest', [
     'run',
+    '--allowOnly=false',
     '--reporter=default',
     '--reporter=json',
     `--outputFile.json=${report}`,
