@@ -1,0 +1,139 @@
+import { NumericalError } from '../errors';
+import { solveBanded } from '../numerics/banded';
+import { type Links, type RodConduction, factorWith, linkConductance } from './assemble';
+import { type ConductivityLaw, potentialOf, temperatureOf, temperatureSlope } from './conductivity-law';
+import type { BoundaryTemperatures } from './model';
+
+/**
+ * Heat through a surface link, W: the F for which T(theta_cell - inner F) - outer F equals the temperature beyond.
+ *
+ * @param potential theta of the cell next to the surface, K
+ * @param beyond temperature on the other side, K
+ */
+export function linkFlux(
+  law: ConductivityLaw,
+  links: Links,
+  index: number,
+  potential: number,
+  beyond: number,
+): number {
+  const inner = links.inner[index]!;
+  const outer = links.outer[index]!;
+  if (outer === Infinity) return 0;
+  if (outer === 0) return (potential - potentialOf(law, beyond)) / inner;
+  if (law.exponent === 0) return (temperatureOf(law, potential) - beyond) / (inner + outer);
+  // Newton from the surface that carries no heat: the function is monotonic and nearly linear over one half-cell.
+  let flux = 0;
+  for (let step = 0; step < 50; step++) {
+    const surface = temperatureOf(law, potential - inner * flux);
+    const change = (surface - beyond - outer * flux) / (inner * temperatureSlope(law, surface) + outer);
+    flux += change;
+    if (Math.abs(change) <= 1e-14 * Math.abs(flux)) return flux;
+    if (!Number.isFinite(change)) break;
+  }
+  if (Number.isFinite(flux)) return flux;
+  throw new NumericalError('heat through a surface with temperature-dependent conductivity', flux, index);
+}
+
+/** Surface slopes in use and the factor that belongs to them. */
+interface Linearisation {
+  factor: RodConduction['factor'];
+  side: Float64Array;
+  front: Float64Array;
+  back: Float64Array;
+}
+
+/**
+ * Conductivity k_300 (300 K/T)^m: the interior is linear in Kirchhoff's potential, only the surfaces are not. Chord
+ * steps on the factored matrix; where the surfaces are so hot that a step gains less than a factor of four, the
+ * surfaces are linearised anew at their present temperature (Newton) and the matrix is factored again.
+ * @returns rise of the potential (ring: of the temperature) above that of the base, K
+ */
+export function solveNonlinear(
+  conduction: RodConduction,
+  heatPerCell: Float64Array,
+  boundary: BoundaryTemperatures,
+): Float64Array {
+  const { grid } = conduction;
+  const base = potentialOf(conduction.law, boundary.side);
+  let line: Linearisation = {
+    factor: conduction.factor,
+    side: new Float64Array(grid.nz).fill(1),
+    front: new Float64Array(grid.nr).fill(1),
+    back: new Float64Array(grid.nr).fill(1),
+  };
+  let rise = new Float64Array(heatPerCell.length);
+  let changeBefore = Infinity;
+  for (let step = 0; step < 60; step++) {
+    const next = chordStep(conduction, heatPerCell, boundary, base, rise, line);
+    let change = 0;
+    let largest = 0;
+    for (let p = 0; p < next.length; p++) {
+      change = Math.max(change, Math.abs(next[p]! - rise[p]!));
+      largest = Math.max(largest, Math.abs(next[p]!));
+    }
+    rise = next;
+    if (!(change < Infinity))
+      throw new NumericalError('conduction with temperature-dependent conductivity', change);
+    if (change <= 1e-13 * largest) return rise;
+    // Rounding ends the descent a little above the bound above.
+    if (change <= 1e-11 * largest && change >= changeBefore) return rise;
+    if (step > 0 && change > 0.25 * changeBefore) line = relinearise(conduction, boundary, base, rise);
+    changeBefore = change;
+  }
+  throw new NumericalError('conduction with temperature-dependent conductivity', changeBefore);
+}
+
+/** Right-hand side with the difference between linearised and true surface flux, then one solve. */
+function chordStep(
+  conduction: RodConduction,
+  heatPerCell: Float64Array,
+  boundary: BoundaryTemperatures,
+  base: number,
+  rise: Float64Array,
+  line: Linearisation,
+): Float64Array<ArrayBuffer> {
+  const { grid, law, side, front, back } = conduction;
+  const { nr, nz, nRadial, nMount } = grid;
+  const right = Float64Array.from(heatPerCell);
+  for (let j = 0; j < nz; j++) {
+    const p = j * nRadial + nr - 1;
+    const beyond = nMount > 0 ? rise[p + 1]! : 0;
+    const true_ = linkFlux(law, side, j, base + rise[p]!, boundary.side + beyond);
+    const excess = linkConductance(side, j, line.side[j]!) * (rise[p]! - beyond) - true_;
+    right[p] = right[p]! + excess;
+    if (nMount > 0) right[p + 1] = right[p + 1]! - excess;
+  }
+  const last = (nz - 1) * nRadial;
+  for (let i = 0; i < nr; i++) {
+    const atFront = linkFlux(law, front, i, base + rise[i]!, boundary.front);
+    const atBack = linkFlux(law, back, i, base + rise[last + i]!, boundary.back);
+    right[i] = right[i]! + linkConductance(front, i, line.front[i]!) * rise[i]! - atFront;
+    right[last + i] = right[last + i]! + linkConductance(back, i, line.back[i]!) * rise[last + i]! - atBack;
+  }
+  return solveBanded(line.factor, right) as Float64Array<ArrayBuffer>;
+}
+
+function relinearise(
+  conduction: RodConduction,
+  boundary: BoundaryTemperatures,
+  base: number,
+  rise: Float64Array,
+): Linearisation {
+  const { grid, law, side, front, back } = conduction;
+  const { nr, nz, nRadial, nMount } = grid;
+  const slopeAt = (links: Links, k: number, p: number, beyond: number) => {
+    const flux = linkFlux(law, links, k, base + rise[p]!, beyond);
+    return temperatureSlope(law, temperatureOf(law, base + rise[p]! - links.inner[k]! * flux));
+  };
+  const last = (nz - 1) * nRadial;
+  const slopes = {
+    side: Float64Array.from({ length: nz }, (_, j) => {
+      const p = j * nRadial + nr - 1;
+      return slopeAt(side, j, p, boundary.side + (nMount > 0 ? rise[p + 1]! : 0));
+    }),
+    front: Float64Array.from({ length: nr }, (_, i) => slopeAt(front, i, i, boundary.front)),
+    back: Float64Array.from({ length: nr }, (_, i) => slopeAt(back, i, last + i, boundary.back)),
+  };
+  return { factor: factorWith(conduction.model, grid, conduction, slopes), ...slopes };
+}

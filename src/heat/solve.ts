@@ -1,0 +1,45 @@
+import { solveBanded } from '../numerics/banded';
+import type { RodConduction } from './assemble';
+import { potentialOf } from './conductivity-law';
+import { type RodField, makeField } from './field';
+import type { BoundaryTemperatures } from './model';
+import { solveNonlinear } from './solve-nonlinear';
+
+/**
+ * Steady temperatures of rod and mount for one heat source.
+ *
+ * @param heatPerCell W, length nRadial*nz, cell (i, j) at j*nRadial + i; not changed
+ * @throws NumericalError when a temperature-dependent conductivity does not converge
+ */
+export function solveRod(
+  conduction: RodConduction,
+  heatPerCell: Float64Array,
+  boundary: BoundaryTemperatures,
+): RodField {
+  const law = conduction.law;
+  const base = potentialOf(law, boundary.side);
+  // Unknown: potential (ring: temperature) above that of the base, so that rounding is relative to the rise.
+  const rise =
+    law.exponent === 0
+      ? solveLinear(conduction, heatPerCell, boundary)
+      : solveNonlinear(conduction, heatPerCell, boundary);
+  return makeField(conduction, heatPerCell, boundary, base, rise);
+}
+
+function solveLinear(
+  conduction: RodConduction,
+  heatPerCell: Float64Array,
+  boundary: BoundaryTemperatures,
+): Float64Array {
+  const { grid, front, back } = conduction;
+  const { nr, nz, nRadial } = grid;
+  const rise = Float64Array.from(heatPerCell);
+  const frontRise = boundary.front - boundary.side;
+  const backRise = boundary.back - boundary.side;
+  const last = (nz - 1) * nRadial;
+  for (let i = 0; i < nr; i++) {
+    rise[i] = rise[i]! + frontRise / (front.inner[i]! + front.outer[i]!);
+    rise[last + i] = rise[last + i]! + backRise / (back.inner[i]! + back.outer[i]!);
+  }
+  return solveBanded(conduction.factor, rise);
+}
