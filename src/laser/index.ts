@@ -8,3 +8,4 @@ export { combineRings, overlapFaces, pumpRings } from './pump-rings';
 export type { PumpRings } from './pump-rings';
 export { reabsorptionLoss, roundTripLoss, thresholdAbsorbedPower } from './threshold';
 export type { Reabsorption, ThresholdInput } from './threshold';
+export { laserWarnings, peakExcitedShare, pumpSecondMomentRadius } from './validity';

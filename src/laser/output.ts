@@ -53,7 +53,7 @@ export interface LaserOutput {
   slopeEfficiency: number;
   /** re-absorption of one round trip before any ion is excited, loss exponent */
   reabsorptionLoss: number;
-  /** W travelling one way inside the cavity, at the output coupler */
+  /** W travelling one way inside the cavity, mean over the round trip */
   circulatingPower: number;
 }
 
@@ -156,8 +156,8 @@ function findSaturation(sustaining: SustainingPower, absorbedPower: number, most
  * passes int [sigma_e (1 + f) n_0(r) - f sigma_e N] s_l(r) / (1 + I(r)/I_sat) dV = delta, I_sat = h nu_l / (sigma_e (1 + f) tau).
  * The share that leaves as output is ln(1/(1-T)) / delta. Everything the laser takes from the excited ions leaves through
  * coupler or loss, so stimulatedPower = eta_p extraction (lambda_p/lambda_l) absorbedPower.
- * Left out: standing-wave hole burning, higher transverse modes, depletion of the ground state by the pump, upconversion,
- * and change of power along the rod (loss and gain of a pass small against 1: good to 2 % up to a loss of 0.4).
+ * Logarithms of T and loss make it exact for a plane wave with all loss at one mirror (Rigrod, J. Appl. Phys. 36, 2487 (1965)).
+ * Left out: standing-wave hole burning, higher transverse modes, depletion of the ground state by the pump, upconversion.
  * @throws NumericalError if the bracketed saturation is not found
  * @source Kubodera & Otsuka, J. Appl. Phys. 50, 653 (1979); Risk, J. Opt. Soc. Am. B 5, 1412 (1988);
  *   Laporta & Brussard, IEEE J. Quantum Electron. 27, 2319 (1991) (from memory)
@@ -188,7 +188,8 @@ export function laserOutput(input: LaserInput): LaserOutput {
   const most = convertible / (loss * circulatingPerSaturation);
   const saturation = lasing ? findSaturation(sustaining, input.absorbedPower, most) : 0;
   sustaining.at(saturation);
-  const slopeEfficiency = (outputLoss * circulatingPerSaturation) / sustaining.slope;
+  const slopeEfficiency =
+    sustaining.slope > 0 ? (outputLoss * circulatingPerSaturation) / sustaining.slope : 0;
   const circulatingPower = saturation * circulatingPerSaturation;
   const lit = {
     outputPower: outputLoss * circulatingPower,

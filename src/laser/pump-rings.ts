@@ -46,20 +46,22 @@ function quantileRadii(
  * and at the widest place of the beam.
  * @param beamRadii one beam radius (m), or one per axial cell
  * @param apertureRadius rod radius, m; the last face
- * @param count rings of even share for each of the two places
+ * @param count rings of even share; the error falls with its square. Where the beam widens, half of them at each of the two places
  * @returns ascending, first 0
  */
 export function overlapFaces(
   profile: BeamProfile,
   beamRadii: number | ArrayLike<number>,
   apertureRadius: number,
-  count = 48,
+  count = 120,
 ): Float64Array {
   const all = typeof beamRadii === 'number' ? [beamRadii] : Array.from(beamRadii);
   const narrowest = all.reduce((a, b) => Math.min(a, b));
   const widest = all.reduce((a, b) => Math.max(a, b));
-  const radii = quantileRadii(profile, narrowest, apertureRadius, count);
-  if (widest > narrowest) radii.push(...quantileRadii(profile, widest, apertureRadius, count));
+  const places = widest > narrowest ? [narrowest, widest] : [narrowest];
+  const radii = places.flatMap((w) =>
+    quantileRadii(profile, w, apertureRadius, Math.ceil(count / places.length)),
+  );
   radii.sort((a, b) => a - b);
   const faces = [0];
   for (const r of radii) if (r > faces[faces.length - 1]! * (1 + 1e-9)) faces.push(r);

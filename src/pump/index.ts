@@ -10,3 +10,4 @@ export { absorbedShare, axialDeposit, unabsorbedShares } from './deposit';
 export { clippedShare, ringShares, shareWithin } from './profile';
 export type { BeamProfile } from './profile';
 export { diodeWavelength, spectralNodes } from './spectrum';
+export { absorptionWarnings, clippingWarnings } from './validity';
