@@ -1,0 +1,10 @@
+export type { Attachment, Cooler, CoolerLimit, CoolerState, Flow, Footprint, Surroundings } from './cooler';
+export { dewPoint, saturationPressure } from './dew-point';
+export { fanCooler, type FanCoolerSpec } from './fan';
+export type { FanSpec } from './fan-curve';
+export { type CoolantSupply, liquidCooler, type LiquidSpec } from './liquid';
+export { passiveCooler, type PassiveSpec } from './passive';
+export { finSpacing, type PlateFinSink } from './plate-fins';
+export { resistanceCooler, type ResistanceSpec } from './resistance';
+export { tecCooler, type TecSpec } from './tec';
+export type { DataSheetSpec, LegSpec } from './thermopile';
