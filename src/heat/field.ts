@@ -1,4 +1,5 @@
 import ndarray, { type NdArray } from 'ndarray';
+import { lagrangeWeights } from '../numerics/lagrange';
 import type { RodConduction } from './assemble';
 import { temperatureOf } from './conductivity-law';
 import type { EndExtrapolation } from './extrapolation';
@@ -171,19 +172,38 @@ function axisPeak(
   for (let k = 1; k < nz + 2; k++) if (at[k]! > at[best]!) best = k;
   let z = axialNode(grid, best);
   let top = at[best]!;
-  if (best > 0 && best < nz + 1) {
-    const below = axialNode(grid, best - 1) - z;
-    const above = axialNode(grid, best + 1) - z;
-    const slopeBelow = (at[best - 1]! - top) / below;
-    const slopeAbove = (at[best + 1]! - top) / above;
-    const curvature = (slopeAbove - slopeBelow) / (above - below);
-    const slope = slopeBelow - curvature * below;
-    if (curvature < 0) {
-      z -= slope / (2 * curvature);
-      top -= (slope * slope) / (4 * curvature);
-    }
-  }
+  if (best > 0 && best < nz + 1) [z, top] = summit(grid, at, best);
   return { temperature: law.exponent === 0 ? boundary.side + top : temperatureOf(law, base + top), z };
+}
+
+/** Place and height of the maximum of the quartic through the hottest node and its neighbours. */
+function summit(grid: RodGrid, at: Float64Array, best: number): [number, number] {
+  const count = Math.min(5, at.length);
+  const start = Math.max(0, Math.min(at.length - count, best - 2));
+  const nodes = new Float64Array(count);
+  for (let k = 0; k < count; k++) nodes[k] = axialNode(grid, start + k);
+  const weights = new Float64Array(count);
+  const height = (z: number) => {
+    lagrangeWeights(z, nodes, 0, count, weights);
+    let sum = 0;
+    for (let k = 0; k < count; k++) sum += weights[k]! * at[start + k]!;
+    return sum;
+  };
+  const below = nodes[best - start - 1]!;
+  const above = nodes[best - start + 1]!;
+  let z = nodes[best - start]!;
+  let top = at[best]!;
+  // Parabolas through ever closer triples; three steps place the summit to a hundredth of a cell.
+  for (let reach = (above - below) / 4, step = 0; step < 3; step++, reach /= 4) {
+    const left = height(z - reach);
+    const right = height(z + reach);
+    const bend = left - 2 * top + right;
+    if (!(bend < 0)) break;
+    const move = (0.5 * (left - right)) / bend;
+    z = Math.min(above, Math.max(below, z + move * reach));
+    top = Math.max(top, height(z));
+  }
+  return [z, top];
 }
 
 /** Axial position k = 0 pumped face, 1 ... nz cell centres, nz + 1 far face. */

@@ -46,7 +46,8 @@ export interface CellCount {
 /** Ready-made cell counts; their measured errors are in the README of this room. */
 export const cellPresets = {
   coarse: { nr: 12, nz: 14 },
-  standard: { nr: 20, nz: 24 },
+  study: { nr: 16, nz: 20 },
+  standard: { nr: 24, nz: 32 },
   fine: { nr: 40, nz: 60 },
 } as const satisfies Record<string, CellCount>;
 
@@ -137,18 +138,18 @@ function axialCells(model: RodHeatModel, wish: GridWish, nz: number): AxialCells
   return { axialFaces, axialCentres, dopedFrom: counts[0]!, dopedTo: counts[0]! + counts[1]! };
 }
 
-/** Near a face the field varies over the pump radius or the absorption length, whichever is shorter. */
+/**
+ * Near the ends of the doped part the field varies over the pump radius or the absorption length, whichever is shorter.
+ * The far end of a rod pumped from the front gets the less, the less light reaches it.
+ */
 function axialAttractors(model: RodHeatModel, wish: GridWish): Attractor[] {
-  const { frontCap, dopedLength, backCap } = model;
-  const squeeze = Math.sqrt(model.conductivityAxial / model.conductivityRadial);
-  const absorptionLength = 1 / Math.max(wish.absorptionCoefficient, 1 / dopedLength);
-  const size = 0.5 * Math.min(wish.pumpRadius * squeeze, absorptionLength, dopedLength / 2);
-  const attractors = [{ at: frontCap, size }];
-  const back = frontCap + dopedLength;
-  if (wish.bothEnds) attractors.push({ at: back, size });
-  else if (backCap > 0) {
-    const weaker = Math.exp(Math.min(20, (wish.absorptionCoefficient * dopedLength) / 2));
-    attractors.push({ at: back, size: Math.min(size * weaker, dopedLength / 3) });
-  }
-  return attractors;
+  const { frontCap, dopedLength } = model;
+  const pumpLength = wish.pumpRadius * Math.sqrt(model.conductivityAxial / model.conductivityRadial);
+  const depth = wish.absorptionCoefficient * dopedLength;
+  const size = 0.75 * Math.min(pumpLength, dopedLength / Math.max(depth, 1));
+  const farSize = wish.bothEnds ? size : 2 * pumpLength * Math.exp(Math.min(depth, 20) / 2);
+  return [
+    { at: frontCap, size: Math.min(size, dopedLength / 4) },
+    { at: frontCap + dopedLength, size: Math.min(farSize, dopedLength / 2) },
+  ];
 }
