@@ -63,6 +63,22 @@ export function uniformRod(length: number, refractiveIndex: number, power: numbe
   };
 }
 
+/**
+ * The rod of the same shape with every power multiplied: with a shape of unit power, the rod at so many dioptres.
+ *
+ * @param power 1/m
+ */
+export function scaleRod(shape: RodOptics, power: number): RodOptics {
+  const times = (powers: Float64Array) => powers.map((one) => one * power);
+  const { slicePowers, frontPower, backPower } = shape;
+  return {
+    ...shape,
+    slicePowers: { sagittal: times(slicePowers.sagittal), tangential: times(slicePowers.tangential) },
+    frontPower: { sagittal: frontPower.sagittal * power, tangential: frontPower.tangential * power },
+    backPower: { sagittal: backPower.sagittal * power, tangential: backPower.tangential * power },
+  };
+}
+
 /** Geometric length of the rod, m. */
 export function rodLength(rod: RodOptics): number {
   let length = 0;

@@ -1,5 +1,5 @@
 export type { Cavity, CavityElement, Plane, RodOptics } from './elements';
-export { rodLength, uniformRod } from './elements';
+export { rodLength, scaleRod, uniformRod } from './elements';
 export type { PreparedCavity } from './prepare';
 export { prepareCavity } from './prepare';
 export type { PlaneMode } from './mode';

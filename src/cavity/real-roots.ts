@@ -24,10 +24,12 @@ const cosines = Float64Array.from({ length: (DEGREE + 1) ** 2 }, (_, i) => {
  * bracketed and found by Brent's method. A root where the function only touches zero is not given.
  *
  * @param f analytic on the interval; sampled a few tens of times per root
+ * @param rounding size below which values of f are rounding: an interval that holds nothing larger is not
+ *   halved again, and coefficients below it count as none; it spares halving a place where f touches zero
  * @returns ascending
  * @source Boyd, Solving Transcendental Equations (2014), chapter 3; Trefethen, Approximation Theory and Approximation Practice (2013), chapter 18
  */
-export function realRoots(f: (x: number) => number, from: number, to: number): number[] {
+export function realRoots(f: (x: number) => number, from: number, to: number, rounding: number): number[] {
   const roots: number[] = [];
   const add = (root: number) => {
     const last = roots[roots.length - 1];
@@ -42,9 +44,9 @@ export function realRoots(f: (x: number) => number, from: number, to: number): n
     interpolate(values, coefficients);
     const fa = values[DEGREE]!;
     const fb = values[0]!;
-    const shape = shapeOf(coefficients);
+    const shape = shapeOf(coefficients, rounding);
     if (shape === 'no root') return;
-    if (shape === 'monotonic' || b - a <= narrowest) {
+    if (shape === 'monotonic' || shape === 'rounding' || b - a <= narrowest) {
       if (fa === 0) add(a);
       if (fa * fb < 0) add(findRoot(f, a, b, { tolerance, fa, fb }));
       if (fb === 0) add(b);
@@ -69,14 +71,15 @@ function interpolate(values: Float64Array, coefficients: Float64Array): void {
 }
 
 /** What the coefficients say of the function on its interval. */
-function shapeOf(c: Float64Array): 'no root' | 'monotonic' | 'unclear' {
+function shapeOf(c: Float64Array, rounding: number): 'no root' | 'monotonic' | 'rounding' | 'unclear' {
   let others = 0;
   for (let k = 1; k <= DEGREE; k++) others += Math.abs(c[k]!);
   const largest = Math.abs(c[0]!) + others;
   if (largest === 0) return 'no root';
-  if (Math.abs(c[DEGREE]!) + Math.abs(c[DEGREE - 1]!) + Math.abs(c[DEGREE - 2]!) > RESOLVED * largest)
-    return 'unclear';
-  if (Math.abs(c[0]!) > others + RESOLVED * largest) return 'no root';
+  if (largest < rounding) return 'rounding';
+  const blur = RESOLVED * largest + rounding;
+  if (Math.abs(c[DEGREE]!) + Math.abs(c[DEGREE - 1]!) + Math.abs(c[DEGREE - 2]!) > blur) return 'unclear';
+  if (Math.abs(c[0]!) > others + blur) return 'no root';
   // Coefficients d of the derivative by the backward recurrence d[k-1] = d[k+1] + 2 k c[k].
   let later = 0;
   let current = 0;
@@ -87,5 +90,5 @@ function shapeOf(c: Float64Array): 'no root' | 'monotonic' | 'unclear' {
     later = current;
     current = earlier;
   }
-  return Math.abs(current / 2) > slopes + RESOLVED * largest * DEGREE ** 2 ? 'monotonic' : 'unclear';
+  return Math.abs(current / 2) > slopes + blur * DEGREE ** 2 ? 'monotonic' : 'unclear';
 }

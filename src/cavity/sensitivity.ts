@@ -105,6 +105,7 @@ function heightInRod(
   turn: number,
   start: Ray,
 ): number {
+  if (!Number.isFinite(start[0])) return Infinity;
   const index = prepared.rods[0];
   if (index === undefined) return start[0];
   const [height, angle] = trace(prepared, rod, plane, tilted, turn, start, index);

@@ -22,6 +22,8 @@ export interface StabilityZone {
 const JOIN = 1e-7;
 /** How far beyond the range edges are searched, as a share of it, so that one at its very end is seen. */
 const BEYOND = 1e-6;
+/** Rounding of A and D, which are near 1; B (m) and C (1/m) are ten times smaller and larger on a bench. */
+const ROUNDING = 1e-13;
 
 interface Edge {
   power: number;
@@ -85,7 +87,7 @@ function findEdges(
 ): Edge[] {
   const trip = identity();
   const beyond = BEYOND * (toPower - fromPower);
-  const roots = (f: () => number, m: 1 | -1): Edge[] =>
+  const roots = (f: () => number, m: 1 | -1, rounding: number): Edge[] =>
     realRoots(
       (power) => {
         tripMatrix(prepared, rodShape, plane, power, trip);
@@ -93,16 +95,20 @@ function findEdges(
       },
       fromPower - beyond,
       toPower + beyond,
+      rounding,
     ).map((power) => ({ power, m }));
   const edges =
     prepared.cavity.kind === 'linear'
       ? [
-          ...roots(() => trip[0]!, -1),
-          ...roots(() => trip[3]!, -1),
-          ...roots(() => trip[1]!, 1),
-          ...roots(() => trip[2]!, 1),
+          ...roots(() => trip[0]!, -1, ROUNDING),
+          ...roots(() => trip[3]!, -1, ROUNDING),
+          ...roots(() => trip[1]!, 1, ROUNDING * 0.1),
+          ...roots(() => trip[2]!, 1, ROUNDING * 10),
         ]
-      : [...roots(() => (trip[0]! + trip[3]!) / 2 - 1, 1), ...roots(() => (trip[0]! + trip[3]!) / 2 + 1, -1)];
+      : [
+          ...roots(() => (trip[0]! + trip[3]!) / 2 - 1, 1, ROUNDING),
+          ...roots(() => (trip[0]! + trip[3]!) / 2 + 1, -1, ROUNDING),
+        ];
   return edges.sort((one, other) => one.power - other.power);
 }
 
