@@ -3,12 +3,9 @@ export { assembleElastic, type AssembledElastic, type Barrel, type ElasticModel 
 export { makeElasticMesh, type ElasticMesh, type ElasticMeshModel } from './mesh';
 export { solveDisplacement, solveElastic, type Displacement, type ElasticSolution } from './solve';
 export type { StressField } from './stress';
-export {
-  sampleTemperature,
-  temperatureMap,
-  type MappedTemperature,
-  type TemperatureMap,
-} from './temperature-map';
+export { rodTemperature, rodTemperatureMap } from './rod-temperature';
+export { sampleTemperature, temperatureMap } from './temperature-map';
+export type { FaceTemperature, FaceTemperatures, MappedTemperature, TemperatureMap } from './temperature-map';
 export { bulgePower, curvatureWeights, faceShapes, type BulgePower, type FaceShape } from './bulge';
 export { largest, peakTensile, smallest, valueAt, vonMises, type PlacedValue } from './extremes';
 export { elasticOutputs, type ElasticOutputs } from './outputs';

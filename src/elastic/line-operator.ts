@@ -1,3 +1,5 @@
+import { lagrangeStart, lagrangeWeights } from '../numerics/lagrange';
+
 /** Sparse matrix along one direction of a tensor grid (compressed rows). */
 export interface LineOperator {
   rows: number;
@@ -52,25 +54,19 @@ export function compose(second: LineOperator, first: LineOperator): LineOperator
  */
 export function interpolation(samples: Float64Array, targets: Float64Array, parity: Parity): LineOperator {
   const mirrored = parity === 'none' ? [] : [1, 0].filter((k) => k < samples.length && samples[k] > 0);
-  const sign = parity === 'odd' ? -1 : 1;
-  const entries = [
-    ...mirrored.map((k) => ({ x: -samples[k], column: k, sign })),
-    ...Array.from(samples, (x, column) => ({ x, column, sign: 1 })),
-  ];
-  const width = Math.min(4, entries.length);
+  const places = Float64Array.from([...mirrored.map((k) => -samples[k]), ...samples]);
+  const width = Math.min(4, places.length);
+  const weights = new Float64Array(width);
   const rows = Array.from(targets, (target) => {
-    const above = entries.findIndex(({ x }) => x > target);
-    const bracket = (above < 0 ? entries.length : above) - 1;
-    const start = Math.max(0, Math.min(bracket - 1, entries.length - width));
-    const stencil = entries.slice(start, start + width);
+    const start = lagrangeStart(target, places, width);
+    lagrangeWeights(target, places, start, width, weights);
     const row = new Map<number, number>();
-    for (const entry of stencil) {
-      let weight = entry.sign;
-      for (const other of stencil) {
-        if (other !== entry) weight *= (target - other.x) / (entry.x - other.x);
-      }
-      if (weight !== 0) row.set(entry.column, (row.get(entry.column) ?? 0) + weight);
-    }
+    weights.forEach((weight, k) => {
+      const behind = start + k - mirrored.length;
+      const column = behind < 0 ? mirrored[start + k] : behind;
+      const signed = behind < 0 && parity === 'odd' ? -weight : weight;
+      if (weight !== 0) row.set(column, (row.get(column) ?? 0) + signed);
+    });
     return row;
   });
   return lineOperator(rows);

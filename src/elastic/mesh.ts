@@ -1,4 +1,4 @@
-import { findRoot } from '../numerics/root';
+import { cellDemand, gradeFaces, type Attractor } from '../numerics/graded-grid';
 
 /**
  * Tensor mesh of nine-node (biquadratic) rectangles. Along each direction two neighbouring elements share a node and
@@ -30,72 +30,60 @@ export interface ElasticMeshModel {
   axialElements: number;
 }
 
-/** A plane (or the axis) that elements crowd towards, and the distance within which they stay small. */
-interface Crowding {
-  position: number;
-  scale: number;
-}
-
 /**
  * Mesh for a rod, fine at the axis, at both faces and at the planes between doped part and caps; these planes are
- * element borders. Element sizes grow in proportion to (distance + scale), so doubling both counts halves every
- * element. Two ends of the same proportions have mirror-symmetric elements.
+ * element borders. Doubling both counts about halves every element.
  */
 export function makeElasticMesh(model: ElasticMeshModel): ElasticMesh {
-  const { radius, length, pumpRadius } = model;
-  const heatedFrom = model.heatedFrom ?? 0;
-  const heatedTo = model.heatedTo ?? length;
-  const near = Math.min(pumpRadius, radius);
-  const far = Math.max(radius / 2, near);
-  const planes: Crowding[] = [
-    { position: 0, scale: heatedFrom > 0 ? far : near },
-    { position: length, scale: heatedTo < length ? far : near },
+  const { radius, length } = model;
+  const from = model.heatedFrom ?? 0;
+  const to = model.heatedTo ?? length;
+  const near = Math.min(model.pumpRadius, radius);
+  // Just under a heated face the stress turns from tension to compression within a fraction of the pump radius.
+  const fine = 0.4 * near;
+  const coarse = Math.max(0.5 * radius, near);
+  const planes: Attractor[] = [
+    { at: 0, size: from > 0 ? coarse : fine },
+    { at: length, size: to < length ? coarse : fine },
   ];
-  if (heatedFrom > 0) planes.push({ position: heatedFrom, scale: near });
-  if (heatedTo < length) planes.push({ position: heatedTo, scale: far });
-  const borders = [...new Set([0, heatedFrom, heatedTo, length])].sort((a, b) => a - b);
+  if (from > 0) planes.push({ at: from, size: fine });
+  if (to < length) planes.push({ at: to, size: coarse });
   return {
-    radialNodes: withMiddles(
-      crowdedPoints([0, radius], [{ position: 0, scale: 1.5 * near }], model.radialElements),
+    radialNodes: withMiddles(gradedBorders([0, radius], [{ at: 0, size: near }], model.radialElements)),
+    axialNodes: withMiddles(
+      gradedBorders(
+        [...new Set([0, from, to, length])].sort((x, y) => x - y),
+        planes,
+        model.axialElements,
+      ),
     ),
-    axialNodes: withMiddles(crowdedPoints(borders, planes, model.axialElements)),
   };
 }
 
-/**
- * Points from the first border to the last, all borders among them, with a density that is the sum of
- * 1/(distance + scale) over the crowding planes.
- */
-function crowdedPoints(borders: number[], planes: Crowding[], count: number): number[] {
-  const first = borders[0];
-  const cumulative = (x: number) =>
-    planes.reduce((sum, { position, scale }) => {
-      const distance = Math.abs(x - position);
-      return sum + Math.sign(x - position) * Math.log1p(distance / scale);
-    }, 0);
-  const total = cumulative(borders[borders.length - 1]) - cumulative(first);
-  const points = [first];
-  let left = count;
-  for (let s = 1; s < borders.length; s++) {
-    const from = borders[s - 1];
-    const to = borders[s];
-    const start = cumulative(from);
-    const share = cumulative(to) - start;
-    const stillToServe = 2 * (borders.length - 1 - s);
-    const wanted = s === borders.length - 1 ? left : Math.round((count * share) / total);
-    const cells = Math.max(2, Math.min(wanted, left - stillToServe));
-    left -= cells;
-    for (let k = 1; k < cells; k++) {
-      const target = start + (share * k) / cells;
-      points.push(findRoot((x) => cumulative(x) - target, from, to, { tolerance: 1e-9 * (to - from) }));
-    }
-    points.push(to);
-  }
-  return points;
+/** Element borders with all the planes among them; every part gets its share of the elements, and at least two. */
+function gradedBorders(planes: number[], attractors: Attractor[], count: number): Float64Array {
+  const parts = planes.slice(1).map((end, s) => ({ start: planes[s], end }));
+  const total = cellDemand(planes[0], planes[planes.length - 1], attractors);
+  const counts = parts.map(({ start, end }) =>
+    Math.max(2, Math.round((count * cellDemand(start, end, attractors)) / total)),
+  );
+  // Rounding is made up where it matters least, in the part with most elements.
+  const largest = counts.indexOf(Math.max(...counts));
+  counts[largest] = Math.max(
+    2,
+    count - counts.reduce((sum, part, s) => (s === largest ? sum : sum + part), 0),
+  );
+  const borders = new Float64Array(counts.reduce((sum, part) => sum + part, 1));
+  let offset = 0;
+  parts.forEach(({ start, end }, s) => {
+    gradeFaces(borders, offset, counts[s], start, end, attractors);
+    offset += counts[s];
+  });
+  return borders;
 }
 
 /** Node coordinates: element borders and the middle of each element. */
-function withMiddles(borders: number[]): Float64Array {
+function withMiddles(borders: Float64Array): Float64Array {
   const nodes = new Float64Array(2 * borders.length - 1);
   for (let e = 0; e < borders.length; e++) {
     nodes[2 * e] = borders[e];

@@ -3,7 +3,7 @@ import { solveBanded } from '../numerics/banded';
 import type { AssembledElastic } from './assemble';
 import type { ElasticMesh } from './mesh';
 import { recoverStress, type StressField } from './stress';
-import { applyPair, sampleTemperature, type MappedTemperature } from './temperature-map';
+import { applyPair, riseOf, sampleTemperature, type MappedTemperature } from './temperature-map';
 
 /** Displacement at the nodes, m; node (i, j) at j*mesh.radialNodes.length + i. */
 export interface Displacement {
@@ -29,10 +29,10 @@ export function solveElastic(
   temperature: MappedTemperature | ((r: number, z: number) => number),
 ): ElasticSolution {
   const mapped = typeof temperature === 'function' ? sampleTemperature(assembled, temperature) : temperature;
-  const rise = riseOf(assembled, mapped);
+  const rise = riseOf(mapped);
   const displacement = displacementOf(assembled, mapped, rise);
   const { map } = mapped;
-  const nodalRise = applyPair(map.nodes, rise, map.radialCount, map.axialCount);
+  const nodalRise = applyPair(map.nodes, rise, map.grid.radii.length);
   return { ...recoverStress(assembled, displacement, nodalRise), displacement };
 }
 
@@ -41,18 +41,7 @@ export function solveElastic(
  * @throws NumericalError when the temperatures are not finite
  */
 export function solveDisplacement(assembled: AssembledElastic, temperature: MappedTemperature): Displacement {
-  return displacementOf(assembled, temperature, riseOf(assembled, temperature));
-}
-
-/** K, T - T_reference of the rod's own grid points, closely packed. */
-function riseOf(assembled: AssembledElastic, { map, values }: MappedTemperature): Float64Array {
-  const { radialCount, stride, axialCount } = map;
-  const reference = assembled.model.referenceTemperature;
-  const rise = new Float64Array(radialCount * axialCount);
-  for (let j = 0; j < axialCount; j++) {
-    for (let i = 0; i < radialCount; i++) rise[j * radialCount + i] = values[j * stride + i] - reference;
-  }
-  return rise;
+  return displacementOf(assembled, temperature, riseOf(temperature));
 }
 
 function displacementOf(
@@ -77,8 +66,8 @@ function displacementOf(
 /** Nodal forces per radian: the prevented expansion, and the pressure of the mount on the barrel. */
 function load(assembled: AssembledElastic, map: MappedTemperature['map'], rise: Float64Array): Float64Array {
   const { moduli, mesh, constraints, model } = assembled;
-  const radialLoad = applyPair(map.radialLoad, rise, map.radialCount, map.axialCount);
-  const axialLoad = applyPair(map.axialLoad, rise, map.radialCount, map.axialCount);
+  const radialLoad = applyPair(map.radialLoad, rise, map.grid.radii.length);
+  const axialLoad = applyPair(map.axialLoad, rise, map.grid.radii.length);
   const forces = new Float64Array(2 * radialLoad.length);
   for (let node = 0; node < radialLoad.length; node++) {
     forces[2 * node] = moduli.thermalAcross * radialLoad[node];

@@ -1,5 +1,12 @@
 import type { AssembledElastic } from './assemble';
-import { applyAcross, applyAlong, compose, interpolation, type LineOperator } from './line-operator';
+import {
+  applyAcross,
+  applyAlong,
+  compose,
+  interpolation,
+  lineOperator,
+  type LineOperator,
+} from './line-operator';
 
 /**
  * The fixed linear way from temperatures on someone else's tensor grid to the load and to temperatures at the nodes.
@@ -7,37 +14,62 @@ import { applyAcross, applyAlong, compose, interpolation, type LineOperator } fr
  */
 export interface TemperatureMap {
   assembled: AssembledElastic;
-  /** radii of the grid inside the rod, and the distance in memory from one (j) to the next (j + 1) */
-  radialCount: number;
+  grid: TemperatureGrid;
+  /** integrals of the radial and of the axial load, and interpolation to the nodes */
+  radialLoad: OperatorPair;
+  axialLoad: OperatorPair;
+  nodes: OperatorPair;
+}
+
+/** An operator per direction; `along` has two more columns than the grid has planes: the air at front and back. */
+export interface OperatorPair {
+  across: LineOperator;
+  along: LineOperator;
+}
+
+/** Where temperatures are known: a tensor grid inside the rod. */
+export interface TemperatureGrid {
+  radii: Float64Array;
+  axials: Float64Array;
   stride: number;
-  axialCount: number;
-  /** integrals of the radial and of the axial load, and interpolation to the nodes: an operator per direction */
-  radialLoad: { across: LineOperator; along: LineOperator };
-  axialLoad: { across: LineOperator; along: LineOperator };
-  nodes: { across: LineOperator; along: LineOperator };
+}
+
+/** How the temperature of each face follows from the planes behind it. */
+export interface FaceTemperatures {
+  front: FaceTemperature;
+  back: FaceTemperature;
+}
+
+/** Temperature of a face = sum of cells[k] times the plane k behind it (nearest first) + air times the air's. */
+export interface FaceTemperature {
+  cells: ArrayLike<number>;
+  air: number;
 }
 
 /**
  * Map from a grid of temperatures, for `solveElastic`. Between grid points the temperature is cubic in each direction
- * and even about the axis; from the outermost points it goes on to the surfaces.
+ * and even about the axis; from the outermost ones it goes on to the surfaces.
  * @param radii m, ascending, inside the rod (cell centres will do), at least 2
- * @param axials m, ascending from the pumped face
- * @param stride distance between (i, j) and (i, j + 1) in the values; larger than radii.length where a mount follows
+ * @param axials m, ascending from the pumped face, at least 2
+ * @param stride distance in the values between (i, j) and (i, j + 1); larger than radii.length where a mount follows
+ * @param faces what is known of the faces; left out: they are extrapolated from the planes, poorly where these are few
  */
 export function temperatureMap(
   assembled: AssembledElastic,
   radii: Float64Array,
   axials: Float64Array,
   stride = radii.length,
+  faces?: FaceTemperatures,
 ): TemperatureMap {
   const { loads, radialLine, axialLine, mesh } = assembled;
   const acrossPoints = interpolation(radii, radialLine.points, 'even');
-  const alongPoints = interpolation(axials, axialLine.points, 'none');
+  const planes = planesWithFaces(axials, mesh.axialNodes[mesh.axialNodes.length - 1], faces);
+  const alongTo = (targets: Float64Array) =>
+    compose(interpolation(planes.places, targets, 'none'), planes.operator);
+  const alongPoints = alongTo(axialLine.points);
   return {
     assembled,
-    radialCount: radii.length,
-    stride,
-    axialCount: axials.length,
+    grid: { radii, axials, stride },
     radialLoad: {
       across: compose(loads.acrossRadial, acrossPoints),
       along: compose(loads.alongRadial, alongPoints),
@@ -48,15 +80,37 @@ export function temperatureMap(
     },
     nodes: {
       across: interpolation(radii, mesh.radialNodes, 'even'),
-      along: interpolation(axials, mesh.axialNodes, 'none'),
+      along: alongTo(mesh.axialNodes),
     },
   };
+}
+
+/** The grid's planes and the faces whose temperature is known through them, and the operator that gives them. */
+function planesWithFaces(
+  axials: Float64Array,
+  length: number,
+  faces: FaceTemperatures | undefined,
+): { places: Float64Array; operator: LineOperator } {
+  const count = axials.length;
+  const rows = Array.from(axials, (_, j) => new Map([[j, 1]]));
+  const places = Array.from(axials);
+  const faceRow = ({ cells, air }: FaceTemperature, planeBehind: (k: number) => number, airColumn: number) =>
+    new Map([...Array.from(cells, (weight, k) => [planeBehind(k), weight] as const), [airColumn, air]]);
+  if (faces) {
+    rows.unshift(faceRow(faces.front, (k) => k, count));
+    places.unshift(0);
+    rows.push(faceRow(faces.back, (k) => count - 1 - k, count + 1));
+    places.push(length);
+  }
+  return { places: Float64Array.from(places), operator: lineOperator(rows) };
 }
 
 /** Temperatures known as values on a mapped grid: (i, j) at j*stride + i, K. */
 export interface MappedTemperature {
   map: TemperatureMap;
   values: Float64Array;
+  /** K, of the air at both ends; needed where the map's faces lean on it */
+  air?: { front: number; back: number };
 }
 
 /**
@@ -74,16 +128,29 @@ export function sampleTemperature(
   return { map: temperatureMap(assembled, radii, axials), values };
 }
 
-/** Applies both operators of a pair; result (i, j) at j*across.rows + i. */
-export function applyPair(
-  pair: { across: LineOperator; along: LineOperator },
-  values: Float64Array,
-  stride: number,
-  lines: number,
-): Float64Array {
-  const width = pair.across.rows;
-  const partial = applyAcross(pair.across, values, stride, lines, new Float64Array(width * lines));
-  return applyAlong(pair.along, partial, width, new Float64Array(width * pair.along.rows));
+/** K, T - T_reference of the grid's own points, closely packed, and after them a plane of each air temperature. */
+export function riseOf({ map, values, air }: MappedTemperature): Float64Array {
+  const { radii, axials, stride } = map.grid;
+  const reference = map.assembled.model.referenceTemperature;
+  const width = radii.length;
+  const rise = new Float64Array(width * (axials.length + 2));
+  for (let j = 0; j < axials.length; j++) {
+    for (let i = 0; i < width; i++) rise[j * width + i] = values[j * stride + i] - reference;
+  }
+  const frontAir = width * axials.length;
+  rise.fill((air?.front ?? reference) - reference, frontAir, frontAir + width);
+  rise.fill((air?.back ?? reference) - reference, frontAir + width);
+  return rise;
+}
+
+/**
+ * Applies both operators of a pair to a field of `width` columns.
+ * @returns value (i, j) at j*across.rows + i
+ */
+export function applyPair({ across, along }: OperatorPair, field: Float64Array, width: number): Float64Array {
+  const lines = field.length / width;
+  const partial = applyAcross(across, field, width, lines, new Float64Array(across.rows * lines));
+  return applyAlong(along, partial, across.rows, new Float64Array(across.rows * along.rows));
 }
 
 function merged(a: Float64Array, b: Float64Array): Float64Array {

@@ -80,12 +80,7 @@ export function conduct(rod: HeatedRod, radialElements: number, axialElements: n
   });
   const ringLoad = lineLoad(radialLine, (r, shape) => r * shape);
   const lineOnly = lineLoad(axialLine, (_, shape) => shape);
-  const heat = applyPair(
-    { across: ringLoad, along: lineOnly },
-    sources,
-    radialLine.points.length,
-    axialLine.points.length,
-  );
+  const heat = applyPair({ across: ringLoad, along: lineOnly }, sources, radialLine.points.length);
   const sum = (matrix: Float64Array, row: number) =>
     matrix.subarray(5 * row, 5 * row + 5).reduce((total, entry) => total + entry, 0);
   for (let j = 0; j < along; j++) {
