@@ -1,5 +1,5 @@
 /** A two-mirror cavity with one thin lens inside; lengths and radii m, radii > 0 concave, Infinity flat. */
-export interface LensCavity {
+interface LensCavity {
   radius1: number;
   radius2: number;
   /** From mirror 1 to the lens. */

@@ -3,18 +3,16 @@ export { rodLength, scaleRod, uniformRod } from './elements';
 export type { PreparedCavity } from './prepare';
 export { prepareCavity } from './prepare';
 export type { PlaneMode } from './mode';
-export { EDGE_GUARD, isStable, planeMode, stability, stabilityAtPower } from './mode';
+export { EDGE_GUARD, planeMode, stability, stabilityAtPower } from './mode';
 export type { EnvelopePoint } from './envelope';
 export { axialLength, modeEnvelope } from './envelope';
-export type { StabilityZone, WorkingPoint } from './zones';
+export type { StabilityZone } from './zones';
 export { stabilityZones, workingPoint } from './zones';
-export type { MirrorSensitivity } from './sensitivity';
 export { misalignmentSensitivity } from './sensitivity';
 export { equivalentThinLens, powerCentroid, totalPower } from './rod-matrix';
 export { roundTripMatrix } from './round-trip';
 export { estimateZones } from './estimate';
 export { plateReducedLength, tiltedMirrorFocalLength } from './ray-matrix';
-export type { LensCavity } from './closed-forms';
 export {
   armVergences,
   foldCompensationAngle,

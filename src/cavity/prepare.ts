@@ -4,7 +4,7 @@ import { elementMatrix, identity, multiply } from './ray-matrix';
 import { passRod } from './rod-matrix';
 
 /** What one plane needs to be asked again and again. */
-export interface PreparedPlane {
+interface PreparedPlane {
   /** Matrix of each element passed once, element i at 4 i; end mirrors of a linear cavity with half their power. */
   steps: RayMatrix;
   /** Everything before, between and after the rods multiplied up, segment i at 4 i; one more than there are rods. */

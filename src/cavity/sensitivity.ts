@@ -5,7 +5,7 @@ import { tripMatrix } from './prepare';
 import { identity } from './ray-matrix';
 import { passRodTo } from './rod-matrix';
 
-export interface MirrorSensitivity {
+interface MirrorSensitivity {
   /** Index of the mirror among the elements. */
   element: number;
   /**

@@ -113,7 +113,7 @@ function findEdges(
 }
 
 /** Where a lens power lies among the zones. */
-export interface WorkingPoint {
+interface WorkingPoint {
   stable: boolean;
   /** Distance to the nearest edge, 1/m: > 0 inside a zone, < 0 outside; Infinity when no edge was found. */
   toNearestEdge: number;
