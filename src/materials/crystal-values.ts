@@ -58,14 +58,15 @@ export function conductivityExponent(crystal: Crystal): Sourced | undefined {
 
 function scaled(value: Sourced, factor: number, unit: string): Sourced {
   const times = (number: number | null): number | null => (number === null ? null : number * factor);
-  return {
+  const result = {
     ...value,
     nominal: value.nominal * factor,
     low: times(value.low),
     high: times(value.high),
     unit,
-    alternatives: undefined,
   };
+  delete result.alternatives;
+  return result;
 }
 
 /**

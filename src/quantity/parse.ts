@@ -95,8 +95,9 @@ function withUnit(text: string, number: number, unit: string, dimension: Dimensi
   try {
     size = unit === '' ? { exponents: [0, 0, 0, 0, 0, 0], factor: 1 } : readUnit(unit);
   } catch (thrown) {
-    if (thrown instanceof UnitFault) return refuse(thrown.kind, thrown.reason);
-    throw thrown;
+    if (!(thrown instanceof UnitFault)) throw thrown;
+    if (thrown.kind === 'ambiguous unit') return refuse(thrown.kind, thrown.reason);
+    return refuse(thrown.kind, `${thrown.reason}; ${label} is needed, such as ${example}`);
   }
   if (!sameDimension(size.exponents, dimension)) {
     const given = describeExponents(size.exponents);

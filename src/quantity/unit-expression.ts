@@ -1,6 +1,6 @@
 import type { FaultKind } from '../errors';
-import { nearestName } from './nearest';
-import { findUnit, UNITS, type Exponents } from './units';
+import { likelyUnit } from './unit-names';
+import { findUnit, type Exponents } from './units';
 
 /** What a unit expression amounts to: SI value = number x factor, and the scale's zero where it is one bare unit. */
 export interface UnitValue {
@@ -23,63 +23,6 @@ export class UnitFault extends Error {
 const LARGEST_EXPONENT = 12;
 const SYMBOL = /^(?:at\.?%|mmH2O|inH2O|°[CF]?|[%‰]|[A-Za-zµΩÅ]+)/;
 const EXPONENT = /^(?:\^ ?\( ?([+-]?\d+) ?\)|\^ ?([+-]?\d+)|([+-]?\d+))/;
-
-/** Symbols offered in "did you mean": every plain unit and the prefixed ones people write. */
-const SUGGESTIONS = [
-  ...Object.keys(UNITS),
-  ...[
-    'nm',
-    'um',
-    'µm',
-    'mm',
-    'cm',
-    'km',
-    'mW',
-    'kW',
-    'mJ',
-    'kJ',
-    'mL',
-    'ml',
-    'ms',
-    'us',
-    'kg',
-    'mbar',
-    'kPa',
-  ],
-  ...['MPa', 'GPa', 'hPa', 'mA', 'mV', 'mrad', 'urad', 'mK', 'kN', 'kHz', 'MHz'],
-];
-const OTHER_NAMES: Readonly<Record<string, string>> = {
-  C: 'degC',
-  F: 'degF',
-  celsius: 'degC',
-  kelvin: 'K',
-  watt: 'W',
-  watts: 'W',
-  metre: 'm',
-  meter: 'm',
-  micrometre: 'um',
-  sec: 's',
-  hr: 'h',
-  hour: 'h',
-  inch: 'in',
-  degree: 'deg',
-  degrees: 'deg',
-  diopter: 'dpt',
-  dioptre: 'dpt',
-  diopters: 'dpt',
-  dioptres: 'dpt',
-  D: 'dpt',
-  amp: 'A',
-  litre: 'L',
-  liter: 'L',
-};
-
-function unknownUnit(symbol: string): UnitFault {
-  const folded = symbol.toLowerCase();
-  const near = OTHER_NAMES[symbol] ?? OTHER_NAMES[folded] ?? nearestName(SUGGESTIONS, symbol);
-  const hint = near === undefined ? '' : `; did you mean "${near}"?`;
-  return new UnitFault('unknown unit', `the unit "${symbol}" is not known${hint}`);
-}
 
 /** Reads one unit expression by recursive descent; a product after a quotient is refused, not guessed. */
 class Reader {
@@ -137,7 +80,11 @@ class Reader {
     const match = SYMBOL.exec(this.text.slice(this.position));
     if (match === null) throw this.unexpected();
     const unit = findUnit(match[0]);
-    if (unit === undefined) throw unknownUnit(match[0]);
+    if (unit === undefined) {
+      const near = likelyUnit(match[0]);
+      const hint = near === undefined ? '' : ` (did you mean "${near}"?)`;
+      throw new UnitFault('unknown unit', `the unit "${match[0]}" is not known${hint}`);
+    }
     this.position += match[0].length;
     return unit;
   }
