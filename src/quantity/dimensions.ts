@@ -145,6 +145,7 @@ const exponentsByDimension = new Map<Dimension, Exponents>(
   }),
 );
 
+/** The name of a dimension with its article ("a power"), an example ("12 W") and its listed units, for messages. */
 export function dimensionRecord(dimension: Dimension): DimensionRecord {
   return RECORDS[dimension];
 }

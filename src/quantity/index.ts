@@ -1,4 +1,4 @@
-export { DIMENSIONS, unitsOf } from './dimensions';
+export { DIMENSIONS, dimensionRecord, unitsOf } from './dimensions';
 export type { Dimension } from './dimensions';
 export { convertTo, formatQuantity } from './format';
 export { editDistance, nearestName } from './nearest';

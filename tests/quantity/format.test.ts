@@ -108,6 +108,14 @@ describe('writing a quantity', () => {
   });
 });
 
+test('the example given for a dimension is itself a quantity of that dimension', () => {
+  for (const kind of DIMENSIONS) {
+    for (const example of dimensionRecord(kind).example.split(' or ')) {
+      expect(parseQuantity(example, kind), example).toMatchObject({ ok: true });
+    }
+  }
+});
+
 test('the nearest name is suggested only when it is near', () => {
   const names = ['copper', 'aluminium 6061', 'brass'];
   expect(nearestName(names, 'cooper')).toBe('copper');

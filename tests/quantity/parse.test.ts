@@ -174,7 +174,12 @@ const REFUSED: [string, Dimension, FaultKind, RegExp][] = [
   ['0.9 W/cm2K', 'heatTransferCoefficient', 'ambiguous unit', /W\/\(cm2 K\) or \(W\/cm2\) K/],
   ['5 W/(m/s K)', 'power', 'ambiguous unit', /m\/\(s K\) or \(m\/s\) K/],
   ['5 toString', 'power', 'unknown unit', /"toString" is not known/],
-  ['12 w', 'power', 'unknown unit', /"w" is not known \(did you mean "W"\?\); a power is needed, such as 12 W/],
+  [
+    '12 w',
+    'power',
+    'unknown unit',
+    /"w" is not known \(did you mean "W"\?\); a power is needed, such as 12 W/,
+  ],
   ['12 KW', 'power', 'unknown unit', /"KW".*did you mean "kW"/],
   ['12 watts', 'power', 'unknown unit', /did you mean "W"/],
   ['22 C', 'temperature', 'unknown unit', /"C".*did you mean "degC"/],
