@@ -156,7 +156,8 @@ function findSaturation(sustaining: SustainingPower, absorbedPower: number, most
  * passes int [sigma_e (1 + f) n_0(r) - f sigma_e N] s_l(r) / (1 + I(r)/I_sat) dV = delta, I_sat = h nu_l / (sigma_e (1 + f) tau).
  * The share that leaves as output is ln(1/(1-T)) / delta. Everything the laser takes from the excited ions leaves through
  * coupler or loss, so stimulatedPower = eta_p extraction (lambda_p/lambda_l) absorbedPower.
- * Logarithms of T and loss make it exact for a plane wave with all loss at one mirror (Rigrod, J. Appl. Phys. 36, 2487 (1965)).
+ * Logarithms of T and loss make it exact for a plane wave with all loss at one mirror, and good to 1 % up
+ * to T = 0.9 with a tenth lost at the other (Rigrod, J. Appl. Phys. 36, 2487 (1965)).
  * Left out: standing-wave hole burning, higher transverse modes, depletion of the ground state by the pump, upconversion.
  * @throws NumericalError if the bracketed saturation is not found
  * @source Kubodera & Otsuka, J. Appl. Phys. 50, 653 (1979); Risk, J. Opt. Soc. Am. B 5, 1412 (1988);

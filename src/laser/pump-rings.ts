@@ -11,7 +11,8 @@ export interface PumpRings {
 
 /** Beyond the last even step the outer share is halved until less than this is left. */
 const LEAST_TAIL = 1e-5;
-const BISECTIONS = 44;
+/** Radii are found to 2^-32 of the aperture: picometres. */
+const BISECTIONS = 32;
 
 /** Radius inside which a given share of the beam lies, by bisection of the monotonic closed form. */
 function radiusOfShare(profile: BeamProfile, radius: number, share: number, largest: number): number {

@@ -2,14 +2,11 @@ import type { Warning } from '../errors';
 import { photonEnergy } from './constants';
 import type { LaserInput } from './output';
 import type { PumpRings } from './pump-rings';
-import { roundTripLoss } from './threshold';
 
 /** Below this ratio of mode to pump radius higher transverse modes find gain that the lowest leaves over. */
 const LEAST_MODE_TO_PUMP = 0.7;
 /** Above this excited share the pump bleaches its own absorption noticeably. */
 const MOST_EXCITED = 0.1;
-/** Above this round-trip loss exponent the power changes much along the cavity. */
-const MOST_LOSS = 0.7;
 
 /**
  * Second-moment radius of the absorbed pump, sqrt(2 <r^2>): the 1/e2 radius of a Gaussian and the edge of a flat-top.
@@ -54,14 +51,6 @@ export function laserWarnings(input: LaserInput, excitedShare: number | null): W
       text:
         `The mode in the rod is ${ratio.toFixed(2)} of the pump radius: higher transverse modes will also lase. ` +
         'Output is computed for the lowest mode alone, so it may be higher and of poorer beam quality.',
-    });
-  const loss = roundTripLoss(input.outputTransmission, input.otherLoss);
-  if (loss > MOST_LOSS)
-    warnings.push({
-      where: 'cavity',
-      text:
-        `The cavity loses ${(-100 * Math.expm1(-loss)).toFixed(0)} % in a round trip: power changes much along it, ` +
-        'and output computed from its mean is rough.',
     });
   if (excitedShare !== null && excitedShare > MOST_EXCITED)
     warnings.push({

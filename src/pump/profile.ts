@@ -1,4 +1,4 @@
-import { regularisedLowerGamma } from './incomplete-gamma';
+import { gammaShare } from '../numerics/special';
 
 /**
  * How the pump's intensity falls with radius. The beam radius w means: 1/e2 intensity radius for a Gaussian and a
@@ -52,6 +52,7 @@ function tableShare(profile: BeamProfile & { kind: 'table' }, radius: number, r:
  */
 export function shareWithin(profile: BeamProfile, radius: number, r: number): number {
   if (!(r > 0)) return 0;
+  if (r === Infinity) return 1;
   const x = (r * r) / (radius * radius);
   switch (profile.kind) {
     case 'gaussian':
@@ -59,7 +60,7 @@ export function shareWithin(profile: BeamProfile, radius: number, r: number): nu
     case 'flat-top':
       return Math.min(1, x);
     case 'super-gaussian':
-      return regularisedLowerGamma(1 / profile.order, 2 * x ** profile.order);
+      return gammaShare(1 / profile.order, 2 * x ** profile.order);
     case 'table':
       return tableShare(profile, radius, r);
   }

@@ -167,3 +167,38 @@ describe('Boltzmann shares at 300 K (level energies from memory; Risk 1988)', ()
     expect(boltzmannShare(perMetre([0, 565, 612, 785]), 2, 300)).toBeCloseTo(0.046485, 6);
   });
 });
+
+describe('output of a high-gain cavity (Rigrod, J. Appl. Phys. 36, 2487 (1965), from memory)', () => {
+  /** Rigrod's output over saturation intensity, mirrors of reflectivity r1 and r2, output through the second. */
+  const rigrod = (gain: number, r1: number, r2: number) =>
+    (((1 - r2) * Math.sqrt(r1)) / ((Math.sqrt(r1) + Math.sqrt(r2)) * (1 - Math.sqrt(r1 * r2)))) *
+    (gain + Math.log(Math.sqrt(r1 * r2)));
+
+  it.each([
+    { transmission: 0.1, other: 0, within: 1e-4 },
+    { transmission: 0.6, other: 0, within: 1e-4 },
+    { transmission: 0.1, other: 0.02, within: 2e-4 },
+    { transmission: 0.5, other: 0.05, within: 2e-3 },
+    { transmission: 0.9, other: 0.1, within: 1e-2 },
+  ])(
+    'T $transmission, loss $other at the other mirror: within $within',
+    ({ transmission, other, within }) => {
+      // A pump much narrower than the mode sees a plane wave, spread over the mode's area pi w^2 / 2.
+      const line = lines[0]!;
+      const input: LaserInput = {
+        ...laser(line, 20),
+        pump: pumpRings({ kind: 'flat-top' }, 2e-7, 1.5e-3),
+        outputTransmission: transmission,
+        otherLoss: other,
+      };
+      const { outputPower, thresholdAbsorbedPower: threshold } = laserOutput(input);
+      const loss = -Math.log((1 - transmission) * (1 - other)) / 2;
+      const gain = (loss * 20) / threshold!;
+      const saturationIntensity = (6.62607015e-34 * 299792458) / 1064e-9 / (line.sigma * line.tau);
+      const expected =
+        ((rigrod(gain, 1 - other, 1 - transmission) * Math.PI * line.wl ** 2) / 2) * saturationIntensity;
+      // The mean-field balance itself is what differs; bounds are the ones stated in the room's README.
+      expect(Math.abs(outputPower / expected - 1)).toBeLessThan(within);
+    },
+  );
+});
