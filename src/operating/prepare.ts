@@ -1,0 +1,155 @@
+import { prepareCavity, type PreparedCavity } from '../cavity';
+import type { ResolvedDesign } from '../design/resolved';
+import { assembleRod, makeRodGrid, solveRod, type GridWish, type RodConduction, type RodGrid, type RodHeatModel } from '../heat';
+import { combineRings, overlapFaces } from '../laser';
+import { beamRadii, beamRadius, caseWindow, channelsAt, prepareAbsorption, ringShares, type CaseWindow, type FocusedBeam, type PreparedAbsorption } from '../pump';
+import { depositAt } from './absorbed';
+import { prepareElastic, type ElasticResponse } from './elastic-response';
+import { prepareLens, type PreparedLens } from './rod-lens';
+
+/** Case temperatures over which the diode's window is sought, K. */
+const caseSearch = { from: 253.15, to: 373.15 };
+
+/** How the absorbed heat spreads over radius, on rings of the heat grid and on finer ones for the overlap with the mode. */
+export interface PumpSpread {
+  /** Ring i of axial cell j at j * nr + i (one row where the beam is collimated). */
+  heatShares: Float64Array;
+  overlapFaces: Float64Array;
+  overlapShares: Float64Array;
+  /** Share of the light that passes outside the rod. */
+  clipped: number;
+}
+
+/** Heat that reaches the base, by reciprocity: share of the heat of each axial cell, and base-to-air conductance. */
+export interface BaseHeat {
+  /** Length nz. */
+  sideShare: Float64Array;
+  /** W/K from the base through rod and faces to the air. */
+  conductance: number;
+}
+
+/** Everything of a design that does not change from one operating point to the next, factored and summed once. */
+export interface PreparedDesign {
+  resolved: ResolvedDesign;
+  model: RodHeatModel;
+  grid: RodGrid;
+  conduction: RodConduction;
+  pump: PumpSpread;
+  absorption: PreparedAbsorption;
+  /** Whether absorption depends on the diode's wavelength at all. */
+  drifts: boolean;
+  caseWindow: CaseWindow;
+  baseHeat: BaseHeat;
+  elastic: ElasticResponse;
+  lens: PreparedLens;
+  cavity: PreparedCavity;
+}
+
+function heatModel({ rod, mount }: ResolvedDesign): RodHeatModel {
+  const end = rod.faceFilm > 0 ? { kind: 'film' as const, coefficient: rod.faceFilm } : { kind: 'insulated' as const };
+  return {
+    radius: rod.radius,
+    frontCap: rod.frontCap,
+    dopedLength: rod.dopedLength,
+    backCap: rod.backCap,
+    conductivityRadial: rod.conductivityRadial,
+    conductivityAxial: rod.conductivityAxial,
+    side: {
+      kind: 'ring',
+      contactConductance: mount.contactConductance,
+      conductivity: mount.conductivity,
+      outerRadius: mount.outerRadius,
+      outer: { kind: 'fixed' },
+    },
+    front: end,
+    back: end,
+  };
+}
+
+function spreadOf(resolved: ResolvedDesign, grid: RodGrid, beam: FocusedBeam): PumpSpread {
+  const { pump, rod } = resolved;
+  const radii = pump.beamQuality === null ? pump.radius : beamRadii(grid.axialFaces, beam);
+  const finer = overlapFaces(pump.profile, radii, rod.radius, 16);
+  const heatShares = ringShares(pump.profile, grid.radialFaces, radii);
+  const middle = (grid.dopedFrom + grid.dopedTo) >> 1;
+  const row = heatShares.length > grid.nr ? heatShares.subarray(middle * grid.nr, (middle + 1) * grid.nr) : heatShares;
+  const inside = row.reduce((sum, share) => sum + share, 0);
+  return { heatShares, overlapFaces: finer, overlapShares: ringShares(pump.profile, finer, radii), clipped: 1 - inside };
+}
+
+/** Reads the heat share from the field that a base one kelvin above the air makes: conduction is reciprocal. */
+function baseHeatOf(conduction: RodConduction, pump: PumpSpread): BaseHeat {
+  const { grid } = conduction;
+  const { nr, nz, nRadial } = grid;
+  const unit = solveRod(conduction, new Float64Array(nRadial * nz), { side: 1, front: 0, back: 0 });
+  const sideShare = new Float64Array(nz);
+  const stride = pump.heatShares.length > nr ? nr : 0;
+  for (let j = 0; j < nz; j++)
+    for (let i = 0; i < nr; i++)
+      sideShare[j] = sideShare[j]! + pump.heatShares[j * stride + i]! * unit.temperatures[j * nRadial + i]!;
+  return { sideShare, conductance: Math.max(0, unit.heatOut.front + unit.heatOut.back) };
+}
+
+function wavelengthRange({ pump }: ResolvedDesign): { from: number; to: number } {
+  const ends = [caseSearch.from - 60, caseSearch.to + 200].map((temperature) => pump.wavelength + pump.drift * (temperature - pump.referenceCaseTemperature));
+  return { from: Math.min(...ends), to: Math.max(...ends) };
+}
+
+function windowOf(resolved: ResolvedDesign): CaseWindow {
+  const { pump, rod, limits } = resolved;
+  return caseWindow({
+    wavelength: pump.wavelength,
+    referenceTemperature: pump.referenceCaseTemperature,
+    drift: pump.drift,
+    linewidth: pump.linewidth,
+    polarisationShares: pump.polarisationShares,
+    absorption: rod.absorption,
+    length: rod.dopedLength,
+    passes: pump.passes,
+    returnReflectivity: pump.returnReflectivity,
+    shareOfBest: limits.absorptionShare,
+    search: caseSearch,
+  });
+}
+
+/**
+ * Factors conduction and elasticity, multiplies up the cavity and spreads the pump, once for a design.
+ * @param cells grid of the rod; 'standard' serves every study
+ */
+export function prepareDesign(resolved: ResolvedDesign, cells: GridWish['cells'] = 'standard'): PreparedDesign {
+  const { pump, rod } = resolved;
+  const model = heatModel(resolved);
+  const range = wavelengthRange(resolved);
+  const absorption = prepareAbsorption(pump.linewidth, pump.polarisationShares, rod.absorption, range.from, range.to);
+  const strongest = channelsAt(absorption, pump.wavelength).reduce((most, channel) => Math.max(most, channel.absorptionCoefficient), 0);
+  const beam: FocusedBeam = {
+    waistRadius: pump.radius,
+    waistPosition: pump.waistPosition,
+    beamQuality: pump.beamQuality,
+    wavelength: pump.wavelength,
+    refractiveIndex: rod.refractiveIndex,
+  };
+  const narrowest = Math.min(...[rod.frontCap, rod.frontCap + rod.dopedLength].map((z) => beamRadius(z, beam)), pump.radius);
+  const grid = makeRodGrid(model, { pumpRadius: Math.min(narrowest, 0.9 * rod.radius), absorptionCoefficient: strongest, cells, bothEnds: pump.passes === 2 });
+  const conduction = assembleRod(model, grid);
+  const spread = spreadOf(resolved, grid, beam);
+  const drifts = rod.absorption.kind !== 'coefficient';
+  return {
+    resolved,
+    model,
+    grid,
+    conduction,
+    pump: spread,
+    absorption,
+    drifts,
+    caseWindow: windowOf(resolved),
+    baseHeat: baseHeatOf(conduction, spread),
+    elastic: prepareElastic(resolved, conduction, spread, drifts ? undefined : depositAt(resolved, grid, absorption, pump.wavelength)),
+    lens: prepareLens(resolved, grid),
+    cavity: prepareCavity(resolved.cavity),
+  };
+}
+
+/** Radial spread of the absorbed power for a given deposit along the rod. */
+export const overlapRings = (prepared: PreparedDesign, deposit: Float64Array) =>
+  combineRings(prepared.pump.overlapFaces, prepared.pump.overlapShares, deposit);

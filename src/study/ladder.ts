@@ -1,0 +1,45 @@
+import type { Interval } from './ceiling';
+
+export interface Rung {
+  id: string;
+  /** 0 is the least demanding way of cooling. */
+  demand: number;
+  windows: readonly Interval[];
+}
+
+export interface LadderStep extends Interval {
+  option: string | null;
+}
+
+/** How much a way of cooling asks of a laboratory: fins, a fan, water, then a TEC on each of them. */
+export function demandOf(kind: string, hotSideKind?: string): number {
+  const plain: Record<string, number> = { resistance: 0, passive: 0, fan: 1, liquid: 2 };
+  return kind === 'tec' ? 3 + (plain[hotSideKind ?? 'passive'] ?? 0) : (plain[kind] ?? 9);
+}
+
+/**
+ * The cooling ladder: along the pump-power axis, the least demanding way of cooling that keeps every limit.
+ * @param rungs options with the powers over which each holds, W
+ * @param to end of the axis, W
+ * @returns steps from 0 to `to` without gaps; `option` is null where none holds
+ */
+export function ladderOf(rungs: readonly Rung[], to: number): LadderStep[] {
+  const marks = new Set([0, to]);
+  for (const { windows } of rungs)
+    for (const window of windows) {
+      if (window.from < to) marks.add(window.from);
+      if (window.to < to) marks.add(window.to);
+    }
+  const edges = [...marks].sort((a, b) => a - b);
+  const ranked = [...rungs].sort((a, b) => a.demand - b.demand);
+  const steps: LadderStep[] = [];
+  for (let k = 1; k < edges.length; k++) {
+    const [from, end] = [edges[k - 1]!, edges[k]!];
+    const middle = (from + end) / 2;
+    const option = ranked.find(({ windows }) => windows.some((w) => w.from <= middle && middle <= w.to))?.id ?? null;
+    const last = steps.at(-1);
+    if (last && last.option === option) last.to = end;
+    else steps.push({ from, to: end, option });
+  }
+  return steps;
+}
