@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import {
   convertTo,
+  dimensionRecord,
   DIMENSIONS,
   formatQuantity,
   nearestName,
