@@ -15,6 +15,9 @@ export type BeamProfile =
    */
   | { kind: 'table'; radii: ArrayLike<number>; intensities: ArrayLike<number>; measuredRadius?: number };
 
+/** Where a super-Gaussian (order 1/2 or more) has fallen to exp(-40) less than 2e-16 of its power is left outside. */
+const DARK_EXPONENT = 40;
+
 /** Power of the linear piece I = i0 + slope (x - r0) between r0 and r, over 2 pi: int I x dx. */
 function pieceIntegral(r0: number, i0: number, slope: number, r: number): number {
   return ((i0 - slope * r0) * (r * r - r0 * r0)) / 2 + (slope * (r * r * r - r0 * r0 * r0)) / 3;
@@ -59,8 +62,10 @@ export function shareWithin(profile: BeamProfile, radius: number, r: number): nu
       return -Math.expm1(-2 * x);
     case 'flat-top':
       return Math.min(1, x);
-    case 'super-gaussian':
-      return gammaShare(1 / profile.order, 2 * x ** profile.order);
+    case 'super-gaussian': {
+      const exponent = 2 * x ** profile.order;
+      return exponent > DARK_EXPONENT ? 1 : gammaShare(1 / profile.order, exponent);
+    }
     case 'table':
       return tableShare(profile, radius, r);
   }

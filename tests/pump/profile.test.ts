@@ -37,6 +37,14 @@ describe('power inside a radius', () => {
     expect(shareWithin({ kind: 'super-gaussian', order: 2 }, w, r)).toBeCloseTo(0.8427007929, 10);
   });
 
+  it('of a super-Gaussian is a number between 0 and 1 at any order and radius', () => {
+    for (const order of [0.5, 1, 2.5, 5, 7, 20, 100])
+      for (let r = 1e-6; r < 4e-3; r += 1e-6) {
+        const inside = shareWithin({ kind: 'super-gaussian', order }, w, r);
+        if (!(inside >= 0 && inside <= 1)) expect.fail(`order ${order}, r ${r}: ${inside}`);
+      }
+  });
+
   it('of a very high order super-Gaussian is that of a flat-top', () => {
     expect(shareWithin({ kind: 'super-gaussian', order: 400 }, w, 1e-4)).toBeCloseTo(0.25, 2);
   });
