@@ -110,10 +110,14 @@ function mountRadii(model: RodHeatModel, nr: number): { faces: Float64Array; cen
 
 type AxialCells = Pick<RodGrid, 'axialFaces' | 'axialCentres' | 'dopedFrom' | 'dopedTo'>;
 
-/** Shares the cells out among cap, doped part and cap, each in proportion to what it asks for. */
-function axialCells(model: RodHeatModel, wish: GridWish, nz: number): AxialCells {
+/**
+ * Shares the cells out among cap, doped part and cap, each in proportion to what it asks for. A rod with caps gets half
+ * as many again, because its heat flows both ways from the doped part's end.
+ */
+function axialCells(model: RodHeatModel, wish: GridWish, wantedCells: number): AxialCells {
   const { frontCap, dopedLength, backCap } = model;
   const length = frontCap + dopedLength + backCap;
+  const nz = frontCap + backCap > 0 ? Math.round(1.5 * wantedCells) : wantedCells;
   const attractors = axialAttractors(model, wish);
   const ends = [0, frontCap, frontCap + dopedLength, length];
   const total = cellDemand(0, length, attractors);

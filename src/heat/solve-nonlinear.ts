@@ -47,12 +47,14 @@ interface Linearisation {
  * Conductivity k_300 (300 K/T)^m: the interior is linear in Kirchhoff's potential, only the surfaces are not. Chord
  * steps on the factored matrix; where the surfaces are so hot that a step gains less than a factor of four, the
  * surfaces are linearised anew at their present temperature (Newton) and the matrix is factored again.
+ * @param start a rise to begin with, from a neighbouring solution
  * @returns rise of the potential (ring: of the temperature) above that of the base, K
  */
 export function solveNonlinear(
   conduction: RodConduction,
   heatPerCell: Float64Array,
   boundary: BoundaryTemperatures,
+  start?: Float64Array,
 ): Float64Array {
   const { grid } = conduction;
   const base = potentialOf(conduction.law, boundary.side);
@@ -62,7 +64,7 @@ export function solveNonlinear(
     front: new Float64Array(grid.nr).fill(1),
     back: new Float64Array(grid.nr).fill(1),
   };
-  let rise = new Float64Array(heatPerCell.length);
+  let rise = Float64Array.from(start ?? new Float64Array(heatPerCell.length));
   let changeBefore = Infinity;
   for (let step = 0; step < 60; step++) {
     const next = chordStep(conduction, heatPerCell, boundary, base, rise, line);
@@ -75,9 +77,8 @@ export function solveNonlinear(
     rise = next;
     if (!(change < Infinity))
       throw new NumericalError('conduction with temperature-dependent conductivity', change);
-    if (change <= 1e-13 * largest) return rise;
-    // Rounding ends the descent a little above the bound above.
-    if (change <= 1e-11 * largest && change >= changeBefore) return rise;
+    // The next change would be at least four times smaller: what is left is below 1e-12 of the rise.
+    if (change <= 4e-12 * largest) return rise;
     if (step > 0 && change > 0.25 * changeBefore) line = relinearise(conduction, boundary, base, rise);
     changeBefore = change;
   }
@@ -99,8 +100,8 @@ function chordStep(
   for (let j = 0; j < nz; j++) {
     const p = j * nRadial + nr - 1;
     const beyond = nMount > 0 ? rise[p + 1]! : 0;
-    const true_ = linkFlux(law, side, j, base + rise[p]!, boundary.side + beyond);
-    const excess = linkConductance(side, j, line.side[j]!) * (rise[p]! - beyond) - true_;
+    const through = linkFlux(law, side, j, base + rise[p]!, boundary.side + beyond);
+    const excess = linkConductance(side, j, line.side[j]!) * (rise[p]! - beyond) - through;
     right[p] = right[p]! + excess;
     if (nMount > 0) right[p + 1] = right[p + 1]! - excess;
   }

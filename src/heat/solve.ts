@@ -9,12 +9,14 @@ import { solveNonlinear } from './solve-nonlinear';
  * Steady temperatures of rod and mount for one heat source.
  *
  * @param heatPerCell W, length nRadial*nz, cell (i, j) at j*nRadial + i; not changed
+ * @param start a neighbouring solution on the same grid; saves steps where the conductivity depends on temperature
  * @throws NumericalError when a temperature-dependent conductivity does not converge
  */
 export function solveRod(
   conduction: RodConduction,
   heatPerCell: Float64Array,
   boundary: BoundaryTemperatures,
+  start?: RodField,
 ): RodField {
   const law = conduction.law;
   const base = potentialOf(law, boundary.side);
@@ -22,7 +24,7 @@ export function solveRod(
   const rise =
     law.exponent === 0
       ? solveLinear(conduction, heatPerCell, boundary)
-      : solveNonlinear(conduction, heatPerCell, boundary);
+      : solveNonlinear(conduction, heatPerCell, boundary, start?.rise);
   return makeField(conduction, heatPerCell, boundary, base, rise);
 }
 

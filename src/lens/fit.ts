@@ -1,4 +1,5 @@
 import type { RodField } from '../heat';
+import { lagrangeStart, lagrangeWeights } from '../numerics/lagrange';
 import { type LensGeometry, partialWeights, stageWeights, stages } from './geometry';
 import { faceGradients } from './gradients';
 import type { LensWeights } from './weights';
@@ -83,6 +84,27 @@ export function integrateFromAxis(geometry: LensGeometry, faces: Float64Array): 
     before -= width * (stageWeights[0] * here[0]! + stageWeights[1] * here[1]! + stageWeights[2] * here[2]!);
   }
   return profile;
+}
+
+/**
+ * Value of a profile at any radius up to the barrel; zero on the axis, cubic between points, even across the axis.
+ * @param profile at the points of the geometry, measured from the axis
+ * @param radius m
+ */
+export function profileAt(geometry: LensGeometry, profile: Float64Array, radius: number): number {
+  const { radii, grid } = geometry;
+  const stretch = (r: number) => Math.asinh(r / grid.radialScale);
+  const inner = [stretch(radii[0]!), stretch(radii[1]!)] as const;
+  const nodes = Float64Array.from([-inner[1], -inner[0], 0, ...radii.map(stretch)]);
+  const weights = new Float64Array(4);
+  const start = lagrangeStart(stretch(radius), nodes, 4);
+  lagrangeWeights(stretch(radius), nodes, start, 4, weights);
+  let value = 0;
+  for (let k = 0; k < 4; k++) {
+    const node = start + k;
+    if (node !== 2) value += weights[k]! * profile[node > 2 ? node - 3 : 1 - node]!;
+  }
+  return value;
 }
 
 /** Parabola fitted to a profile over the mode's intensity. */

@@ -6,6 +6,7 @@ export {
   fitLens,
   fitProfile,
   opticalPathProfile,
+  profileAt,
 } from './fit';
 export { type LensGeometry, prepareLens } from './geometry';
 export { type LensWeights, weighLens } from './weights';
