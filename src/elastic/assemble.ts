@@ -1,8 +1,9 @@
 import type { BandedFactor } from '../numerics/banded';
 import { axialExpansion, type ElasticConstants } from './closed-forms';
-import { compose, interpolation, type LineOperator } from './line-operator';
+import type { LineOperator } from './line-operator';
 import type { ElasticMesh } from './mesh';
-import { bestSlopes, lineLoad, quadraticLine, type QuadraticLine } from './quadratic-line';
+import { lineLoad, quadraticLine, type QuadraticLine } from './quadratic-line';
+import { slopeOperators, type SlopeOperators } from './slopes';
 import { factorStiffness, type Constraints } from './stiffness';
 
 /** What holds the barrel. */
@@ -58,16 +59,6 @@ export interface LoadOperators {
   alongAxial: LineOperator;
 }
 
-/** From displacements at the nodes of a line to derivatives at its nodes. */
-export interface SlopeOperators {
-  /** d/dr of u_r, which is odd about the axis */
-  acrossOdd: LineOperator;
-  /** d/dr of u_z, which is even about the axis */
-  acrossEven: LineOperator;
-  /** d/dz */
-  along: LineOperator;
-}
-
 /**
  * Assembles and factors the stiffness of a rod. It depends on constants, mesh and on whether the barrel is clamped, not
  * on temperatures: one assembly serves all of them.
@@ -83,8 +74,6 @@ export function assembleElastic(model: ElasticModel, mesh: ElasticMesh): Assembl
     axialLine,
     model.barrel.kind === 'clamped',
   );
-  const radialSlopes = bestSlopes(radialLine);
-  const axialSlopes = bestSlopes(axialLine);
   return {
     model,
     mesh,
@@ -99,14 +88,7 @@ export function assembleElastic(model: ElasticModel, mesh: ElasticMesh): Assembl
       acrossAxial: lineLoad(radialLine, (r, shape) => r * shape),
       alongAxial: lineLoad(axialLine, (_, __, slope) => slope),
     },
-    // Cubic through the four nearest points where the derivative of a quadratic element is best: one order more than
-    // the element's own derivative at its nodes, also on the axis and at the surfaces.
-    slopes: {
-      // The slope of an odd function is even, and the other way round.
-      acrossOdd: compose(interpolation(radialSlopes.points, mesh.radialNodes, 'even'), radialSlopes.operator),
-      acrossEven: compose(interpolation(radialSlopes.points, mesh.radialNodes, 'odd'), radialSlopes.operator),
-      along: compose(interpolation(axialSlopes.points, mesh.axialNodes, 'none'), axialSlopes.operator),
-    },
+    slopes: slopeOperators(radialLine, axialLine),
   };
 }
 

@@ -106,19 +106,3 @@ export function lineLoad(
   }
   return lineOperator(rows);
 }
-
-/** Where the derivative of quadratic elements is most accurate (two per element), and the operator that takes it there. */
-export function bestSlopes(line: QuadraticLine): { points: Float64Array; operator: LineOperator } {
-  const offset = 1 / Math.sqrt(3);
-  const points = new Float64Array(2 * line.elements);
-  const rows: Map<number, number>[] = [];
-  for (let e = 0; e < line.elements; e++) {
-    const half = (line.nodes[2 * e + 2] - line.nodes[2 * e]) / 2;
-    for (const [k, xi] of [-offset, offset].entries()) {
-      points[2 * e + k] = line.nodes[2 * e + 1] + half * xi;
-      const slopes = quadraticSlopes(xi);
-      rows.push(new Map(slopes.map((slope, a) => [2 * e + a, slope / half] as const)));
-    }
-  }
-  return { points, operator: lineOperator(rows) };
-}

@@ -3,7 +3,13 @@ import { solveBanded } from '../numerics/banded';
 import type { AssembledElastic } from './assemble';
 import type { ElasticMesh } from './mesh';
 import { recoverStress, type StressField } from './stress';
-import { applyPair, riseOf, sampleTemperature, type MappedTemperature } from './temperature-map';
+import {
+  applyPair,
+  riseOf,
+  sampleTemperature,
+  type MappedTemperature,
+  type TemperatureMap,
+} from './temperature-map';
 
 /** Displacement at the nodes, m; node (i, j) at j*mesh.radialNodes.length + i. */
 export interface Displacement {
@@ -49,7 +55,12 @@ function displacementOf(
   { map }: MappedTemperature,
   rise: Float64Array,
 ): Displacement {
-  const unknowns = solveBanded(assembled.factors, load(assembled, map, rise));
+  const { mesh, factors, constraints, model } = assembled;
+  const forces = thermalForces(map, rise);
+  const pressure = model.barrel.kind === 'free' ? (model.barrel.pressure ?? 0) : 0;
+  if (pressure !== 0) pressBarrel(forces, mesh, pressure);
+  for (const unknown of constraints) forces[unknown] = 0;
+  const unknowns = solveBanded(factors, forces);
   const count = unknowns.length / 2;
   const radial = new Float64Array(count);
   const axial = new Float64Array(count);
@@ -57,25 +68,26 @@ function displacementOf(
     radial[node] = unknowns[2 * node];
     axial[node] = unknowns[2 * node + 1];
   }
-  // Every value of the solution depends on every temperature, so one value tells.
-  if (!Number.isFinite(radial[count - 1]))
-    throw new NumericalError('elastic: temperatures are not finite', NaN);
-  return { mesh: assembled.mesh, radial, axial };
+  // Every value of the solution depends on every temperature, so the first one not held tells.
+  if (!Number.isFinite(axial[0])) throw new NumericalError('elastic: temperatures are not finite', NaN);
+  return { mesh, radial, axial };
 }
 
-/** Nodal forces per radian: the prevented expansion, and the pressure of the mount on the barrel. */
-function load(assembled: AssembledElastic, map: MappedTemperature['map'], rise: Float64Array): Float64Array {
-  const { moduli, mesh, constraints, model } = assembled;
-  const radialLoad = applyPair(map.radialLoad, rise, map.grid.radii.length);
-  const axialLoad = applyPair(map.axialLoad, rise, map.grid.radii.length);
+/**
+ * Nodal forces per radian of the prevented expansion: int strain(v) : C : expansion (T - T_reference) r dr dz.
+ * @param rise K, as `riseOf` packs it
+ * @returns N/rad; 2*node is the radial, 2*node + 1 the axial force
+ */
+export function thermalForces(map: TemperatureMap, rise: Float64Array): Float64Array {
+  const { moduli } = map.assembled;
+  const width = map.grid.radii.length;
+  const radialLoad = applyPair(map.radialLoad, rise, width);
+  const axialLoad = applyPair(map.axialLoad, rise, width);
   const forces = new Float64Array(2 * radialLoad.length);
   for (let node = 0; node < radialLoad.length; node++) {
     forces[2 * node] = moduli.thermalAcross * radialLoad[node];
     forces[2 * node + 1] = moduli.thermalAlong * axialLoad[node];
   }
-  const pressure = model.barrel.kind === 'free' ? (model.barrel.pressure ?? 0) : 0;
-  if (pressure !== 0) pressBarrel(forces, mesh, pressure);
-  for (const unknown of constraints) forces[unknown] = 0;
   return forces;
 }
 

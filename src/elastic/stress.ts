@@ -29,7 +29,7 @@ interface StrainField {
 
 /**
  * Stresses at the nodes from displacement and temperature there. Strains are the recovered derivatives (see
- * `assembleElastic`); on the axis the hoop strain is the radial one. On a free surface the strain across it follows from
+ * `slopeOperators`). On a free surface the strain across it follows from
  * the normal stress that is known there, which is better than any one-sided derivative, and the shear is zero.
  * @param rise K, T - T_reference at the nodes
  */
@@ -61,13 +61,8 @@ function recoverStrain({ mesh, slopes }: AssembledElastic, displacement: Displac
   const axial = applyAlong(slopes.along, displacement.axial, across, empty());
   const shear = applyAcross(slopes.acrossEven, displacement.axial, across, along, empty());
   const turning = applyAlong(slopes.along, displacement.radial, across, empty());
-  const hoop = empty();
-  for (let j = 0, node = 0; j < along; j++) {
-    for (let i = 0; i < across; i++, node++) {
-      hoop[node] = i === 0 ? radial[node] : displacement.radial[node] / mesh.radialNodes[i];
-      shear[node] += turning[node];
-    }
-  }
+  const hoop = applyAcross(slopes.overRadius, displacement.radial, across, along, empty());
+  for (let node = 0; node < shear.length; node++) shear[node] += turning[node];
   return { radial, hoop, axial, shear };
 }
 

@@ -47,8 +47,8 @@ export interface FaceTemperature {
 }
 
 /**
- * Map from a grid of temperatures, for `solveElastic`. Between grid points the temperature is cubic in each direction
- * and even about the axis; from the outermost ones it goes on to the surfaces.
+ * Map from a grid of temperatures, for `solveElastic`. Between grid points the temperature is cubic along the axis
+ * and in asinh(r/scale) across it, even about the axis; from the outermost ones it goes on to the surfaces.
  * @param radii m, ascending, inside the rod (cell centres will do), at least 2
  * @param axials m, ascending from the pumped face, at least 2
  * @param stride distance in the values between (i, j) and (i, j + 1); larger than radii.length where a mount follows
@@ -62,7 +62,11 @@ export function temperatureMap(
   faces?: FaceTemperatures,
 ): TemperatureMap {
   const { loads, radialLine, axialLine, mesh } = assembled;
-  const acrossPoints = interpolation(radii, radialLine.points, 'even');
+  // Inside the pumped part the temperature falls with r^2, outside with ln r: asinh(r/scale) is close to both.
+  const scale = radii[Math.min(2, radii.length - 1)];
+  const stretched = (places: Float64Array) => places.map((r) => Math.asinh(r / scale));
+  const acrossTo = (targets: Float64Array) => interpolation(stretched(radii), stretched(targets), 'even');
+  const acrossPoints = acrossTo(radialLine.points);
   const planes = planesWithFaces(axials, mesh.axialNodes[mesh.axialNodes.length - 1], faces);
   const alongTo = (targets: Float64Array) =>
     compose(interpolation(planes.places, targets, 'none'), planes.operator);
@@ -79,7 +83,7 @@ export function temperatureMap(
       along: compose(loads.alongAxial, alongPoints),
     },
     nodes: {
-      across: interpolation(radii, mesh.radialNodes, 'even'),
+      across: acrossTo(mesh.radialNodes),
       along: alongTo(mesh.axialNodes),
     },
   };
