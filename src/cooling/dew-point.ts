@@ -34,6 +34,6 @@ export function dewPoint(temperature: number, relativeHumidity: number): number 
   const { a, b, c } = pressure < OVER_WATER.a ? OVER_ICE : OVER_WATER;
   // log(p/a) = b t / (t + c); no vapour at all sends t to -c.
   if (pressure === 0) return Math.min(temperature, FREEZING - OVER_WATER.c);
-  const exponent = Math.log(pressure / a);
+  const exponent = Math.log(pressure) - Math.log(a);
   return Math.min(temperature, Math.max((c * exponent) / (b - exponent), -OVER_WATER.c) + FREEZING);
 }

@@ -102,7 +102,7 @@ function channelReynolds(
 
 /**
  * Heat per fin area and per kelvin above the entering air, W/(m2 K): Teertstra et al. while laminar; in
- * turbulent flow Gnielinski's local value turned to the same reference by the air's warming, 1 - exp(-NTU).
+ * turbulent flow Gnielinski's local value with its entrance factor, turned to the same reference by the air's warming, 1 - exp(-NTU).
  */
 function channelCoefficient(
   sink: PlateFinSink,
@@ -116,20 +116,17 @@ function channelCoefficient(
   const laminar = (finChannelNusselt(reynolds, prandtl) * air.thermalConductivity) / geometry.spacing;
   const share = turbulentShare(point.reynolds);
   if (share === 0) return laminar;
-  const local =
-    (gnielinskiNusselt(point.reynolds, prandtl) * air.thermalConductivity) /
-    hydraulicDiameter(sink, geometry);
+  const diameter = hydraulicDiameter(sink, geometry);
+  const entrance = 1 + (diameter / sink.height) ** (2 / 3);
+  const nusselt = gnielinskiNusselt(point.reynolds, prandtl) * entrance;
+  const local = (nusselt * air.thermalConductivity) / diameter;
   const area = geometry.channelFinArea + geometry.channelBaseArea;
   const turbulent = (-Math.expm1((-local * area) / capacityRate) * capacityRate) / area;
-  return (1 - share) * laminar + share * turbulent;
+  // Short channels shed more in their laminar entrance than Gnielinski's law has near its lower end.
+  return (1 - share) * laminar + share * Math.max(laminar, turbulent);
 }
 
-function settleFan(
-  spec: FanCoolerSpec,
-  air: AirSide,
-  heat: number,
-  { ambient }: Surroundings,
-): CoolerState {
+function settleFan(spec: FanCoolerSpec, air: AirSide, heat: number, { ambient }: Surroundings): CoolerState {
   const { power } = spec.fan;
   const entry = ambient + air.entryRise;
   const sinkTemperature = entry + heat * air.sinkResistance;

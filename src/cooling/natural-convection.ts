@@ -39,6 +39,27 @@ export function verticalPlateNusselt(rayleigh: number, prandtl: number): number 
 }
 
 /**
+ * Mean Nusselt number of an isothermal vertical plate in laminar flow, closer there than the one above.
+ *
+ * Nu = 0.68 + 0.670 Ra^(1/4) / [1 + (0.492/Pr)^(9/16)]^(4/9)
+ *
+ * @param rayleigh on the height, up to 1e9
+ * @source Churchill & Chu 1975, Int. J. Heat Mass Transfer 18, 1323 (from memory)
+ */
+export function laminarPlateNusselt(rayleigh: number, prandtl: number): number {
+  return 0.68 + (0.67 * rayleigh ** 0.25) / (1 + (0.492 / prandtl) ** (9 / 16)) ** (4 / 9);
+}
+
+/** Laminar up to Ra 1e9, the law of the whole range from 1e10, and in between by shares of log Ra. */
+export function outerFaceNusselt(rayleigh: number, prandtl: number): number {
+  if (rayleigh <= 1e9) return laminarPlateNusselt(rayleigh, prandtl);
+  const share = Math.min(1, Math.log10(rayleigh) - 9);
+  return (
+    (1 - share) * laminarPlateNusselt(rayleigh, prandtl) + share * verticalPlateNusselt(rayleigh, prandtl)
+  );
+}
+
+/**
  * Mean Nusselt number between isothermal vertical plates heated on both sides; heat per wall area and per
  * kelvin of wall above the entering air.
  *

@@ -6,7 +6,7 @@ import {
   optimumFinSpacing,
   parallelPlateNusselt,
   rayleighNumber,
-  verticalPlateNusselt,
+  outerFaceNusselt,
 } from './natural-convection';
 import { finEfficiency, finGeometry, type FinGeometry, type PlateFinSink } from './plate-fins';
 import { blackRadiationCoefficient, cavityEmissivity } from './radiation';
@@ -101,7 +101,7 @@ function shed(sink: PassiveSink, difference: number, { ambient, airPressure }: S
   const perLength = sink.convectionShare * air.thermalConductivity;
   const channelConvection = (perLength * parallelPlateNusselt(onSpacing)) / spacing;
   const outerConvection =
-    (perLength * verticalPlateNusselt(onHeight, kinematicViscosity / diffusivity)) / spec.height;
+    (perLength * outerFaceNusselt(onHeight, kinematicViscosity / diffusivity)) / spec.height;
   const black = blackRadiationCoefficient(temperature, ambient);
   const wall = geometry.channelFinArea + geometry.channelBaseArea;
   const channelCoefficient = channelConvection + (black * sink.channelRadiation) / wall;

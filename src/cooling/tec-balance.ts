@@ -67,38 +67,52 @@ function heldBalance(stack: Stack, current: number, base: number, pumped: number
   });
 }
 
+/** Where a search for the hot junction temperature begins; kept from one search to the next of a series. */
+interface Start {
+  hot: number;
+  /** Change of the hot side's excess per kelvin of hot junction. */
+  slope: number;
+}
+
+/** A start for the first search of a series: nothing fed back, so the excess falls as the junction rises. */
+function firstStart(stack: Stack): Start {
+  return { hot: stack.ambient, slope: -1 };
+}
+
 /**
- * Finds the hot junction temperature that hot side and modules agree on. Without a steady one (the hot side
- * warms faster than the heat it sheds: runaway) the answer is undefined.
+ * Finds the hot junction temperature that hot side and modules agree on, by secant steps. Without a steady one
+ * (the hot side warms faster than the heat it sheds: runaway) the answer is undefined.
  *
- * @param guess of the hot junction temperature, K
+ * @param start where to begin; moved to the answer
  * @param balanceAt the modules' side of the balance at a given hot junction temperature
  */
-function matchHotSide(stack: Stack, guess: number, balanceAt: (hot: number) => Balance): Balance | undefined {
-  let hot = guess;
-  let balance = balanceAt(hot);
-  let excess = hotSideExcess(stack, balance);
-  let next = hot + excess;
+function matchHotSide(stack: Stack, start: Start, balanceAt: (hot: number) => Balance): Balance | undefined {
+  let { hot, slope } = start;
+  let excess = hotSideExcess(stack, balanceAt(hot));
   for (let step = 0; step < 60; step++) {
-    if (Math.abs(excess) < 1e-10 || next === hot) return balance;
     const last = hot;
     const lastExcess = excess;
-    hot = next;
-    balance = balanceAt(hot);
+    hot -= excess / slope;
+    const balance = balanceAt(hot);
     excess = hotSideExcess(stack, balance);
-    const slope = (excess - lastExcess) / (hot - last);
-    // The rounding of two temperatures of some 300 K is all that is left.
-    if (Math.abs(excess) < 1e-8 && Math.abs(hot - last) < 1e-7) return balance;
+    const move = hot - last;
+    // Over a shorter move the rounding of two temperatures of some 300 K would spoil the slope.
+    if (Math.abs(move) > 1e-6) slope = (excess - lastExcess) / move;
     if (!(slope < 0)) return undefined;
-    next = hot - excess / slope;
+    if (Math.abs(excess) < 1e-5) {
+      // The last step needs no check: it leaves its own square.
+      start.hot = hot - excess / slope;
+      start.slope = slope;
+      return Math.abs(excess) < 1e-10 ? balance : balanceAt(start.hot);
+    }
   }
   return undefined;
 }
 
 /** At a given current, the heat the modules take from a base at `base`. */
-function pumpingAt(stack: Stack, current: number, base: number, guess: number): Balance | undefined {
+function pumpingAt(stack: Stack, current: number, base: number, start: Start): Balance | undefined {
   const { coldResistance } = stack;
-  return matchHotSide(stack, guess, (hot) =>
+  return matchHotSide(stack, start, (hot) =>
     withProperties(stack, hot, (module) => {
       const { seebeck, conductance } = module;
       const drop = 1 + coldResistance * (seebeck * current + conductance);
@@ -122,14 +136,14 @@ export function floatAt(
   stack: Stack,
   current: number,
   heat: number,
-  guess = stack.ambient,
+  start = firstStart(stack),
 ): Balance | undefined {
   const { coldResistance, leakConductance, ambient } = stack;
   // Heat into the cold junction is at0 - slope Tc once the base is written by the junction.
   const share = 1 / (1 + leakConductance * coldResistance);
   const atZero = (heat + leakConductance * ambient) * share;
   const slope = leakConductance * share;
-  return matchHotSide(stack, guess, (hot) =>
+  return matchHotSide(stack, start, (hot) =>
     withProperties(stack, hot, (module) => {
       const { seebeck, resistance, conductance } = module;
       const joule = 0.5 * current * current * resistance;
@@ -158,14 +172,9 @@ export function greatestPumping(
   base: number,
   highestCurrent: number,
 ): { heat: number; current: number } {
-  let guess = stack.ambient;
-  const negative = (current: number) => {
-    const balance = pumpingAt(stack, current, base, guess);
-    if (!balance) return Infinity;
-    guess = balance.hot;
-    return -balance.pumped;
-  };
-  const { x, value } = lowestPoint(negative, 0, highestCurrent, 1e-5 * highestCurrent);
+  const start = firstStart(stack);
+  const negative = (current: number) => -(pumpingAt(stack, current, base, start)?.pumped ?? -Infinity);
+  const { x, value } = lowestPoint(negative, 0, highestCurrent, 3e-5 * highestCurrent);
   return { heat: -value - leakInto(stack, base), current: x };
 }
 
@@ -198,15 +207,10 @@ export function hold(
 
 /** The base as cold as currents from 0 to `highestCurrent` can make it under a heat. */
 export function coldestBase(stack: Stack, heat: number, highestCurrent: number): Balance {
-  let guess = stack.ambient;
-  const base = (current: number) => {
-    const balance = floatAt(stack, current, heat, guess);
-    if (!balance) return Infinity;
-    guess = balance.hot;
-    return balance.base;
-  };
-  const { x } = lowestPoint(base, 0, highestCurrent, 1e-5 * highestCurrent);
-  const balance = floatAt(stack, x, heat, guess) ?? floatAt(stack, 0, heat);
+  const start = firstStart(stack);
+  const base = (current: number) => floatAt(stack, current, heat, start)?.base ?? Infinity;
+  const { x } = lowestPoint(base, 0, highestCurrent, 3e-5 * highestCurrent);
+  const balance = floatAt(stack, x, heat, start) ?? floatAt(stack, 0, heat);
   // Without current the modules only conduct, and that always has a steady state.
   if (!balance) throw new Error('a TEC without current has no steady state');
   return balance;
