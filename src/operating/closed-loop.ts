@@ -151,3 +151,30 @@ function bracket(at: (base: number) => LoopState, gapOf: (state: LoopState) => n
   const base = findRoot(gap, coldest, hottestBase, { tolerance, fa: atCold, fb: atHot });
   return { state: at(base), converged: true };
 }
+
+/** Base temperatures looked at for further steady states, between the coldest and the hottest possible. */
+const stateSamples = 48;
+
+/**
+ * Base temperatures of all stable steady states: where the base would be driven back from both sides. Two of them mean
+ * hysteresis: which one the laser settles in depends on where it comes from.
+ * @returns ascending, K; empty where the cooler finds no balance below 700 K
+ */
+export function stableBases(prepared: PreparedDesign, question: Question, rodTemperature: RodTemperature): number[] {
+  const { cooler } = question.cooler;
+  const { surroundings } = prepared.resolved;
+  const gap = (base: number) => imbalance(prepared, question, follow(prepared, question, base, rodTemperature));
+  const low = Math.min(cooler.baseTemperature(0, surroundings), surroundings.ambient) - 5;
+  const most = 2 * (diodeHeatOf(prepared, question.pumpPower) + question.pumpPower);
+  const high = Math.min(hottestBase, Math.max(cooler.baseTemperature(most, surroundings), low + 20) + 5);
+  const found: number[] = [];
+  let before = gap(low);
+  for (let k = 1; k <= stateSamples; k++) {
+    const base = low + ((high - low) * k) / stateSamples;
+    const after = gap(base);
+    if (before > 0 && after <= 0)
+      found.push(findRoot(gap, low + ((high - low) * (k - 1)) / stateSamples, base, { tolerance: 1e-4, fa: before, fb: after }));
+    before = after;
+  }
+  return found;
+}

@@ -1,13 +1,13 @@
 import { planeMode } from '../cavity';
 import { dewPoint, type CoolerLimit, type CoolerState } from '../cooling';
-import { planeStrainSurfaceHoop } from '../elastic';
 import { heatSource, meanWithin, solveRod, type RodField } from '../heat';
-import { closeLoop, diodeHeatOf, type LoopState, type Question, type RodTemperature } from './closed-loop';
+import { closeLoop, diodeHeatOf, stableBases, type LoopState, type Question, type RodTemperature } from './closed-loop';
 import { elasticState } from './elastic-response';
 import { ledgerOf } from './ledger';
 import { overlapRings, type PreparedDesign } from './prepare';
 import { lase } from './rod-laser';
 import { rodLens, type RodLens } from './rod-lens';
+import { sectionStressEstimate } from './section-estimate';
 import type { OperatingPoint } from './types';
 
 /** An operating point with what the studies and the drawings need beside its numbers. */
@@ -93,7 +93,6 @@ export function solvePoint(prepared: PreparedDesign, question: Question, start?:
   const ledger = ledgerOf(prepared, loop, cooler, separate, { pumpPower, outputPower: output.power, toAir: loop.heatLoad - loop.mountHeat, diodeHeat });
   const meanPumped = meanWithin(field, resolved.pump.radius);
   const allowed = limits.fractureStrength;
-  const constants = { youngsModulus: rod.youngModulus, poissonRatio: rod.poissonRatio, expansion: rod.expansionAcross, axialExpansion: rod.expansion };
   const point: OperatingPoint = {
     state: steady ? 'steady' : 'none',
     ...(steady || reason === undefined ? {} : { reason }),
@@ -115,7 +114,7 @@ export function solvePoint(prepared: PreparedDesign, question: Question, start?:
       peakTensile: elastic.peakTensile.value,
       position: { r: elastic.peakTensile.r, z: elastic.peakTensile.z },
       fractureShare: elastic.peakTensile.value / allowed,
-      estimate: planeStrainSurfaceHoop(constants, meanWithin(field, rod.radius), field.edgeTemperature),
+      estimate: sectionStressEstimate(rod, field),
     },
     lens: {
       dioptricPower: lens.power,
@@ -148,3 +147,7 @@ export function solvePoint(prepared: PreparedDesign, question: Question, start?:
   };
   return { point, coolerLimits: [...cooler.limits, ...(separate?.limits ?? [])], cooler, field, lens };
 }
+
+/** Base temperatures of all stable steady states at one question, K; see `stableBases`. */
+export const steadyBases = (prepared: PreparedDesign, question: Question): number[] =>
+  prepared.drifts ? stableBases(prepared, question, rodTemperatureOf(prepared)) : [];

@@ -64,7 +64,13 @@ function windowsBetween(marks: readonly number[], at: PointAt, to: number): Inte
 
 function planeOfEdge(power: number, at: PointAt): Plane | 'both' {
   const close = planes.filter((plane) => Math.abs(room(at(power), plane)) < 1e-3);
-  return close.length === 1 ? close[0]! : close.length === 2 ? 'both' : room(at(power), 'sagittal') < room(at(power), 'tangential') ? 'sagittal' : 'tangential';
+  return close.length === 1
+    ? close[0]!
+    : close.length === 2
+      ? 'both'
+      : room(at(power), 'sagittal') < room(at(power), 'tangential')
+        ? 'sagittal'
+        : 'tangential';
 }
 
 /** The zone edge next above a lens power in either plane; null where the zones reach on. */
@@ -95,6 +101,18 @@ export function cavityEdgeOf(at: PointAt, zones: Zones, to: number): CavityEdge 
   const windows = windowsBetween(crossings, at, to);
   const end = windows[0]?.to;
   if (end === undefined || end >= to)
-    return { pumpPower: null, plane: null, dioptricPower: nextEdge(at(to).lens.dioptricPower, zones), windows, crossings };
-  return { pumpPower: end, plane: planeOfEdge(end, at), dioptricPower: at(end).lens.dioptricPower, windows, crossings };
+    return {
+      pumpPower: null,
+      plane: null,
+      dioptricPower: nextEdge(at(to).lens.dioptricPower, zones),
+      windows,
+      crossings,
+    };
+  return {
+    pumpPower: end,
+    plane: planeOfEdge(end, at),
+    dioptricPower: at(end).lens.dioptricPower,
+    windows,
+    crossings,
+  };
 }

@@ -98,12 +98,15 @@ export function ceilingOf(at: MarginsAt, to: number, extra: readonly number[] = 
   const powers = scanPowers(to, extra);
   const seen = powers.map(at);
   const names = [...new Set(seen.flatMap((margins) => margins.map((margin) => margin.limit)))];
-  const crossings = names.flatMap((limit) => crossingsOf(limit, powers, at, seen)).sort((a, b) => a.power - b.power);
+  const crossings = names
+    .flatMap((limit) => crossingsOf(limit, powers, at, seen))
+    .sort((a, b) => a.power - b.power);
   const windows = windowsOf(names, seen[0]!, crossings, to);
   const first = windows[0];
   const limits = names.map((limit) => {
     const cross = crossings.find((item) => item.limit === limit && item.breaks);
-    const atStart = shareOf(seen[0]!, limit) < 0 && !crossings.some((item) => item.limit === limit && !item.breaks);
+    const atStart =
+      shareOf(seen[0]!, limit) < 0 && !crossings.some((item) => item.limit === limit && !item.breaks);
     return { limit, pumpPower: atStart ? 0 : (cross?.power ?? null) };
   });
   return {

@@ -36,7 +36,8 @@ export function ladderOf(rungs: readonly Rung[], to: number): LadderStep[] {
   for (let k = 1; k < edges.length; k++) {
     const [from, end] = [edges[k - 1]!, edges[k]!];
     const middle = (from + end) / 2;
-    const option = ranked.find(({ windows }) => windows.some((w) => w.from <= middle && middle <= w.to))?.id ?? null;
+    const option =
+      ranked.find(({ windows }) => windows.some((w) => w.from <= middle && middle <= w.to))?.id ?? null;
     const last = steps.at(-1);
     if (last && last.option === option) last.to = end;
     else steps.push({ from, to: end, option });
