@@ -1,0 +1,45 @@
+import { createContext } from 'svelte';
+
+export type Theme = 'light' | 'dark';
+const storageKey = 'pump-ceiling/theme';
+
+function remembered(): Theme | null {
+  try {
+    const kept = localStorage.getItem(storageKey);
+    return kept === 'light' || kept === 'dark' ? kept : null;
+  } catch {
+    return null; // storage may be closed to the page; the system's theme then holds
+  }
+}
+
+/** How the page is looked at; nothing here changes an answer. */
+export class View {
+  private system = $state<Theme>('light');
+  private chosen = $state<Theme | null>(remembered());
+  theme = $derived<Theme>(this.chosen ?? this.system);
+
+  /** Which state the rod section shows. */
+  beam = $state<'lasing' | 'blocked'>('lasing');
+  /** The pump axis of the sweeps. */
+  pumpAxis = $state<'incident' | 'absorbed'>('incident');
+  /** How far out the rod section looks. */
+  wholeMount = $state(false);
+
+  constructor() {
+    const query = matchMedia('(prefers-color-scheme: dark)');
+    const follow = () => (this.system = query.matches ? 'dark' : 'light');
+    follow();
+    query.addEventListener('change', follow);
+  }
+
+  toggleTheme(): void {
+    this.chosen = this.theme === 'dark' ? 'light' : 'dark';
+    try {
+      localStorage.setItem(storageKey, this.chosen);
+    } catch {
+      // not remembered then; the page still changes
+    }
+  }
+}
+
+export const [useView, provideView] = createContext<View>();
