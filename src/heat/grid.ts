@@ -151,7 +151,7 @@ function axialAttractors(model: RodHeatModel, wish: GridWish): Attractor[] {
   const pumpLength = wish.pumpRadius * Math.sqrt(model.conductivityAxial / model.conductivityRadial);
   const depth = wish.absorptionCoefficient * dopedLength;
   const size = 0.75 * Math.min(pumpLength, dopedLength / Math.max(depth, 1));
-  const farSize = wish.bothEnds ? size : 2 * pumpLength * Math.exp(Math.min(depth, 20) / 2);
+  const farSize = wish.bothEnds ? size : 2 * pumpLength * Math.exp(Math.min(depth, 20) / 4);
   return [
     { at: frontCap, size: Math.min(size, dopedLength / 4) },
     { at: frontCap + dopedLength, size: Math.min(farSize, dopedLength / 2) },

@@ -66,10 +66,13 @@ export function prepareLens(grid: RodGrid, edge?: number): LensGeometry {
     let start = lagrangeStart(x, nodes, 4);
     if (kink !== undefined) start = squares[q]! < kink ? Math.min(start, split - 4) : Math.max(start, split);
     lagrangeWeights(x, nodes, start, 4, local);
+    // Outside the edge the gradient falls as 1/r^2: there r^2 + scale^2 = (scale cosh x)^2 times it is interpolated.
+    const outside = kink !== undefined && squares[q]! > kink;
     for (let a = 0; a < 4; a++) {
       const node = start + a - 2;
+      const fall = outside ? (Math.cosh(nodes[start + a]!) / Math.cosh(x)) ** 2 : 1;
       faceIndex[4 * q + a] = node < 0 ? -1 - node : node;
-      faceShare[4 * q + a] = local[a]!;
+      faceShare[4 * q + a] = local[a]! * fall;
     }
   }
   const inverseGaps = new Float64Array(nr - 1);
