@@ -10,7 +10,7 @@ export interface Point {
  * The lowest point of a function with one valley between a and b: parabolic steps with golden sections as
  * fallback. A valley that runs down to b is seen at once.
  *
- * @param f continuous on [a, b]; +Infinity where there is no answer
+ * @param f continuous on [a, b]; +Infinity from some place on where there is no answer any more
  * @param tolerance width of x at which to stop
  * @source Brent 1973, Algorithms for Minimization without Derivatives, chapter 5 (from memory)
  */
@@ -20,6 +20,10 @@ export function lowestPoint(f: (x: number) => number, a: number, b: number, tole
   let low = a;
   let high = b;
   let best = point(f, a + GOLDEN * (b - a));
+  while (best.value === Infinity && high - low > tolerance) {
+    high = best.x;
+    best = point(f, low + GOLDEN * (high - low));
+  }
   let second = best;
   let third = best;
   let step = 0;

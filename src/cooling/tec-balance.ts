@@ -3,6 +3,9 @@ import { lowestPoint } from './lowest-point';
 import { heatPumped, moduleVoltage, type ThermoelectricModule } from './thermoelectric';
 import type { Thermopile } from './thermopile';
 
+/** How finely the best current is sought, as a share of the range; the base, flat there, is then good to 1e-6 K. */
+const CURRENT_SHARE = 3e-5;
+
 /** Modules between the mount base and a hot side, all that a balance needs. Resistances in K/W. */
 export interface Stack {
   pile: Thermopile;
@@ -164,6 +167,15 @@ export function floatAt(
 }
 
 /**
+ * No search for the best current goes beyond this. At fixed junction temperatures Qc peaks at S Tc/R, and a hot
+ * side only lowers that; half as much again leaves room for properties at other temperatures.
+ */
+function searchEnd(stack: Stack, highestCurrent: number): number {
+  const { seebeck, resistance } = stack.pile.at(stack.ambient);
+  return Math.min(highestCurrent, (1.5 * seebeck * stack.ambient) / resistance);
+}
+
+/**
  * The greatest heat that can be taken from a base at `base` with currents from 0 to `highestCurrent`, and the
  * current that does it. Negative when the base would need heat to stay that cold.
  */
@@ -174,7 +186,8 @@ export function greatestPumping(
 ): { heat: number; current: number } {
   const start = firstStart(stack);
   const negative = (current: number) => -(pumpingAt(stack, current, base, start)?.pumped ?? -Infinity);
-  const { x, value } = lowestPoint(negative, 0, highestCurrent, 3e-5 * highestCurrent);
+  const end = searchEnd(stack, highestCurrent);
+  const { x, value } = lowestPoint(negative, 0, end, CURRENT_SHARE * end);
   return { heat: -value - leakInto(stack, base), current: x };
 }
 
@@ -209,7 +222,8 @@ export function hold(
 export function coldestBase(stack: Stack, heat: number, highestCurrent: number): Balance {
   const start = firstStart(stack);
   const base = (current: number) => floatAt(stack, current, heat, start)?.base ?? Infinity;
-  const { x } = lowestPoint(base, 0, highestCurrent, 3e-5 * highestCurrent);
+  const end = searchEnd(stack, highestCurrent);
+  const { x } = lowestPoint(base, 0, end, CURRENT_SHARE * end);
   const balance = floatAt(stack, x, heat, start) ?? floatAt(stack, 0, heat);
   // Without current the modules only conduct, and that always has a steady state.
   if (!balance) throw new Error('a TEC without current has no steady state');

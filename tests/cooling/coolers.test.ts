@@ -68,7 +68,7 @@ describe.each(Object.entries(everyCooler))('%s', (_, cooler) => {
         if (state.state === 'none') return;
         const nodes = balance(state);
         const scale = 1e-9 * (1 + watts + state.electricalPower);
-        expect(nodes.get('base')! - watts).toBeLessThan(scale);
+        expect(Math.abs(nodes.get('base')! - watts)).toBeLessThan(scale);
         expect(Math.abs((nodes.get('wall plug') ?? 0) - state.electricalPower)).toBeLessThan(scale);
         expect(Math.abs(nodes.get('surroundings')! + state.heatToAmbient)).toBeLessThan(scale);
         for (const [node, excess] of nodes) {

@@ -14,6 +14,11 @@ describe('fins under a fan', () => {
     expect(details.airFlow).toBeLessThan(fanSpec.fan.freeFlow);
   });
 
+  it('need 0.15 to 0.5 K/W for a sink of this size (common practice, no source)', () => {
+    expect(details.thermalResistance).toBeGreaterThan(0.15);
+    expect(details.thermalResistance).toBeLessThan(0.5);
+  });
+
   it('never run colder than the leaving air', () => {
     const air = room.ambient + details.airRise!;
     expect(fanCooler(fanSpec).baseTemperature(20, room)).toBeGreaterThan(air);

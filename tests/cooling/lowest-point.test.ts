@@ -14,5 +14,7 @@ describe('the lowest point', () => {
   });
   it('is found beside a region without an answer', () => {
     expect(lowestPoint((x) => (x > 3 ? Infinity : (x - 2) ** 2), 0, 5, 1e-6).x).toBeCloseTo(2, 5);
+    expect(lowestPoint((x) => (x > 0.3 ? Infinity : (x - 0.2) ** 2), 0, 50, 1e-6).x).toBeCloseTo(0.2, 5);
+    expect(lowestPoint((x) => (x > 0.3 ? Infinity : -x), 0, 50, 1e-6).x).toBeCloseTo(0.3, 5);
   });
 });

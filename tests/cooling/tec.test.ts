@@ -53,6 +53,15 @@ describe('a TEC', () => {
     expect(warnings[0]!.text).toContain('cannot hold');
   });
 
+  it('needs no more current than helps, whatever the driver could give', () => {
+    for (const resistance of [0.2, 4, 20]) {
+      const base = (highestCurrent: number) =>
+        tecCooler({ ...tecSpec, highestCurrent }, resistanceCooler({ resistance })).baseTemperature(30, room);
+      // 1e-5 K: the best current is found to a share of the highest.
+      expect(Math.abs(base(100) - base(12))).toBeLessThan(1e-5);
+    }
+  });
+
   it('has a capacity that a poor hot side takes away', () => {
     const capacity = (resistance: number) =>
       tecCooler(tecSpec, resistanceCooler({ resistance })).settle(0, room).details.capacity!;
