@@ -7,7 +7,7 @@ import { slopeOperators, type SlopeOperators } from './slopes';
 import { factorStiffness, type Constraints } from './stiffness';
 
 /** What holds the barrel. */
-export type Barrel =
+type Barrel =
   /** no displacement is prevented; the mount may press on it evenly (pressure in Pa, > 0 inwards) */
   | { kind: 'free'; pressure?: number }
   /** a rigid, slippery bore: u_r = 0, free to slide along the axis */
@@ -49,7 +49,7 @@ export interface ElasticModuli {
 }
 
 /** From temperatures at the integration points to the load; the product of an operator per direction. */
-export interface LoadOperators {
+interface LoadOperators {
   /** radial load: int (r dN/dr + N) theta dr */
   acrossRadial: LineOperator;
   /** its axial factor, and the radial factor of the axial load: int N theta dz, int N theta r dr */

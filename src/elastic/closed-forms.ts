@@ -45,7 +45,7 @@ export function planeStrainSurfaceHoop(
 }
 
 /** Principal stresses at one radius, Pa, tension positive. */
-export interface SectionStress {
+interface SectionStress {
   radial: number;
   hoop: number;
   axial: number;

@@ -1,11 +1,16 @@
-export * from './closed-forms';
-export { assembleElastic, type AssembledElastic, type Barrel, type ElasticModel } from './assemble';
-export { makeElasticMesh, type ElasticMesh, type ElasticMeshModel } from './mesh';
-export { solveDisplacement, solveElastic, type Displacement, type ElasticSolution } from './solve';
-export type { StressField } from './stress';
+export {
+  planeStrainStress,
+  planeStrainSurfaceHoop,
+  planeStressSurfaceHoop,
+  thermalShockParameter,
+  uniformRodHeatLimit,
+} from './closed-forms';
+export { assembleElastic, type ElasticModel } from './assemble';
+export { bulgePower, curvatureWeights, faceShapes } from './bulge';
+export { peakTensile, type PlacedValue, valueAt } from './extremes';
+export { elasticPresets, type ElasticMesh, type ElementCount, makeElasticMesh } from './mesh';
+export { type ElasticOutputs, elasticOutputs } from './outputs';
 export { rodTemperature, rodTemperatureMap } from './rod-temperature';
+export { solveDisplacement, solveElastic } from './solve';
+export type { StressField } from './stress';
 export { sampleTemperature, temperatureMap } from './temperature-map';
-export type { FaceTemperature, FaceTemperatures, MappedTemperature, TemperatureMap } from './temperature-map';
-export { bulgePower, curvatureWeights, faceShapes, type BulgePower, type FaceShape } from './bulge';
-export { largest, peakTensile, smallest, valueAt, vonMises, type PlacedValue } from './extremes';
-export { elasticOutputs, type ElasticOutputs } from './outputs';

@@ -12,8 +12,20 @@ export interface ElasticMesh {
   axialNodes: Float64Array;
 }
 
+/** Number of elements from axis to barrel (at least 2) and from face to face (at least 2 in each part). */
+export interface ElementCount {
+  radialElements: number;
+  axialElements: number;
+}
+
+/** Ready-made element counts; their measured errors are in the README of this room. */
+export const elasticPresets = {
+  study: { radialElements: 10, axialElements: 14 },
+  report: { radialElements: 20, axialElements: 32 },
+} as const satisfies Record<string, ElementCount>;
+
 /** What a mesh is fitted to. */
-export interface ElasticMeshModel {
+export interface ElasticMeshModel extends ElementCount {
   /** m */
   radius: number;
   /** m, caps included */
@@ -24,10 +36,6 @@ export interface ElasticMeshModel {
   heatedTo?: number;
   /** m, radius over which the heat falls off */
   pumpRadius: number;
-  /** elements from axis to barrel, at least 2 */
-  radialElements: number;
-  /** elements from face to face, at least 2 in each part */
-  axialElements: number;
 }
 
 /**

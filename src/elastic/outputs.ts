@@ -2,7 +2,7 @@ import { largest, smallest, valueAt, vonMises, type PlacedValue } from './extrem
 import type { ElasticSolution } from './solve';
 
 /** An extremum as reference problems print it: SI, tension positive. */
-export interface PrintedExtreme {
+interface PrintedExtreme {
   value_Pa: number;
   r_m: number;
   z_m: number;

@@ -28,7 +28,7 @@ export interface OperatorPair {
 }
 
 /** Where temperatures are known: a tensor grid inside the rod. */
-export interface TemperatureGrid {
+interface TemperatureGrid {
   radii: Float64Array;
   axials: Float64Array;
   stride: number;
@@ -41,7 +41,7 @@ export interface FaceTemperatures {
 }
 
 /** Temperature of a face = sum of cells[k] times the plane k behind it (nearest first) + air times the air's. */
-export interface FaceTemperature {
+interface FaceTemperature {
   cells: ArrayLike<number>;
   air: number;
 }

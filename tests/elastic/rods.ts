@@ -1,4 +1,4 @@
-import { makeElasticMesh, type ElasticMesh, type ElasticModel } from '../../src/elastic';
+import { elasticPresets, makeElasticMesh, type ElasticMesh, type ElasticModel } from '../../src/elastic';
 
 /** Constants of an oxide crystal, for checks whose outcome does not hang on them. */
 export const oxide = { youngsModulus: 282e9, poissonRatio: 0.28, expansion: 7.5e-6 };
@@ -14,8 +14,7 @@ export const studyMesh = makeElasticMesh({
   radius: 2e-3,
   length: 10e-3,
   pumpRadius: 4e-4,
-  radialElements: 10,
-  axialElements: 14,
+  ...elasticPresets.study,
 });
 
 /** Equal elements, so that halving them is exact. */
