@@ -3,7 +3,7 @@ const LAMINAR_END = 2300;
 const TURBULENT_START = 4000;
 
 /** Darcy friction factor of a smooth tube in turbulent flow, f = (0.790 ln Re - 1.64)^-2; Re 3000 to 5e6. */
-export function turbulentFriction(reynolds: number): number {
+function turbulentFriction(reynolds: number): number {
   return (0.79 * Math.log(reynolds) - 1.64) ** -2;
 }
 

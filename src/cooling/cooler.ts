@@ -68,7 +68,7 @@ export const HIGHEST_BASE = 500;
 export const LOWEST_BASE = 150;
 
 /** The words for a base outside what is believed, or undefined when it is inside. */
-export function beyondBelief(baseTemperature: number): string | undefined {
+function beyondBelief(baseTemperature: number): string | undefined {
   if (baseTemperature > HIGHEST_BASE) return `base would exceed ${HIGHEST_BASE} K`;
   if (baseTemperature < LOWEST_BASE) return `base would fall below ${LOWEST_BASE} K`;
   return undefined;

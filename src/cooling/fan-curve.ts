@@ -46,7 +46,7 @@ export function fanPressure(fan: FanSpec, volumeFlow: number, density: number): 
  * @returns Pa
  * @source Culham & Muzychka 2001, IEEE Trans. CPT 24, 159 (from memory)
  */
-export function finPressureDrop(
+function finPressureDrop(
   sink: PlateFinSink,
   geometry: FinGeometry,
   air: FluidProperties,

@@ -11,7 +11,7 @@ export interface BasePlate {
 }
 
 /** Radius of the circle that has the footprint's area, m. */
-export function equivalentRadius(footprint: Footprint): number {
+function equivalentRadius(footprint: Footprint): number {
   return 'radius' in footprint ? footprint.radius : footprint.side / Math.sqrt(Math.PI);
 }
 

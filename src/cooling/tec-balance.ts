@@ -34,7 +34,7 @@ export interface Balance {
 }
 
 /** Heat from the room into a base at a temperature, W. */
-export function leakInto(stack: Stack, base: number): number {
+function leakInto(stack: Stack, base: number): number {
   return stack.leakConductance * (stack.ambient - base);
 }
 

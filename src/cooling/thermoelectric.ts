@@ -44,7 +44,7 @@ export function heatRejected(
 }
 
 /** Z = S^2 / (R K), 1/K. */
-export function figureOfMerit({ seebeck, resistance, conductance }: ThermoelectricModule): number {
+function figureOfMerit({ seebeck, resistance, conductance }: ThermoelectricModule): number {
   return (seebeck * seebeck) / (resistance * conductance);
 }
 

@@ -15,6 +15,7 @@ import {
   rayleighNumber,
   verticalPlateNusselt,
 } from '../../src/cooling/natural-convection';
+import { finEfficiency } from '../../src/cooling/plate-fins';
 import { blackRadiationCoefficient, cavityEmissivity } from '../../src/cooling/radiation';
 import { spreadingResistance } from '../../src/cooling/spreading';
 import {
@@ -124,6 +125,21 @@ describe('natural convection', () => {
     const nusselt = parallelPlateNusselt((rayleigh * spacing ** 4) / 0.18 ** 4);
     // 0.3 %: the closed form for the optimum is rounded (Nu 1.307).
     expect(off((nusselt * 0.02772) / spacing, 4.857)).toBeLessThan(3e-3);
+  });
+});
+
+describe('fins', () => {
+  // Incropera, Example 3.9 (from memory): rod of 5 mm, h 100 W/(m2 K), 100 and 25 degC, long.
+  it.each([
+    [398, 8.3096],
+    [180, 5.5882],
+    [14, 1.5585],
+  ])('a long rod of %d W/(m K) sheds %d W (Incropera Example 3.9)', (conductivity, printed) => {
+    // A rod of diameter D has the edge per section, 4/D, of a wide fin of thickness D/2.
+    const diameter = 5e-3;
+    const rod = { finHeight: 2, finThickness: diameter / 2, conductivity };
+    const heat = finEfficiency(100, rod) * 100 * Math.PI * diameter * rod.finHeight * 75;
+    expect(off(heat, printed)).toBeLessThan(1e-4);
   });
 });
 
