@@ -69,7 +69,7 @@ export interface GridWish {
  */
 export function makeRodGrid(model: RodHeatModel, wish: GridWish): RodGrid {
   const { nr, nz } = typeof wish.cells === 'string' ? cellPresets[wish.cells] : wish.cells;
-  const inside = Math.max(2, Math.round(0.42 * nr));
+  const inside = Math.max(2, Math.round(0.4375 * nr - 0.5));
   const { scale, step, radii } = anchoredRadii(nr, model.radius, wish.pumpRadius, inside);
   const centreSquares = radii.map((r) => r * r);
   const faceSquares = new Float64Array(nr + 1);

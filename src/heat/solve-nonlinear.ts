@@ -45,8 +45,8 @@ interface Linearisation {
 
 /**
  * Conductivity k_300 (300 K/T)^m: the interior is linear in Kirchhoff's potential, only the surfaces are not. Chord
- * steps on the factored matrix; where the surfaces are so hot that a step gains less than a factor of four, the
- * surfaces are linearised anew at their present temperature (Newton) and the matrix is factored again.
+ * steps on the factored matrix; where dT/dtheta at a surface has moved by more than a fifth, the surfaces are linearised
+ * anew at their present temperature (Newton) and the matrix is factored again.
  * @param start a rise to begin with, from a neighbouring solution
  * @returns rise of the potential (ring: of the temperature) above that of the base, K
  */
@@ -65,24 +65,49 @@ export function solveNonlinear(
     back: new Float64Array(grid.nr).fill(1),
   };
   let rise = Float64Array.from(start ?? new Float64Array(heatPerCell.length));
-  let changeBefore = Infinity;
-  for (let step = 0; step < 60; step++) {
+  let change = Infinity;
+  for (let step = 0; step < 80; step++) {
     const next = chordStep(conduction, heatPerCell, boundary, base, rise, line);
-    let change = 0;
+    holdBack(conduction, base, rise, next);
+    change = 0;
     let largest = 0;
     for (let p = 0; p < next.length; p++) {
       change = Math.max(change, Math.abs(next[p]! - rise[p]!));
       largest = Math.max(largest, Math.abs(next[p]!));
     }
     rise = next;
-    if (!(change < Infinity))
-      throw new NumericalError('conduction with temperature-dependent conductivity', change);
-    // The next change would be at least four times smaller: what is left is below 1e-12 of the rise.
+    if (!(change < Infinity)) break;
+    // Every further change is at least four times smaller: what is left is below 1e-12 of the rise.
     if (change <= 4e-12 * largest) return rise;
-    if (step > 0 && change > 0.25 * changeBefore) line = relinearise(conduction, boundary, base, rise);
-    changeBefore = change;
+    const slopes = surfaceSlopes(conduction, boundary, base, rise);
+    if (hasMoved(slopes, line)) {
+      line = { factor: factorWith(conduction.model, grid, conduction, slopes), ...slopes };
+    }
   }
-  throw new NumericalError('conduction with temperature-dependent conductivity', changeBefore);
+  throw new NumericalError('conduction with temperature-dependent conductivity', change);
+}
+
+/** Halves a step that would make a cell next to a surface hotter than anything solid, or of no temperature at all. */
+function holdBack(conduction: RodConduction, base: number, rise: Float64Array, next: Float64Array): void {
+  const { grid, law } = conduction;
+  const ceiling = 2e4;
+  for (let halving = 0; halving < 60; halving++) {
+    let hottest = 0;
+    for (let j = 0; j < grid.nz; j++) {
+      hottest = Math.max(hottest, temperatureOf(law, base + next[j * grid.nRadial + grid.nr - 1]!));
+    }
+    if (hottest <= ceiling) return;
+    for (let p = 0; p < next.length; p++) next[p] = (next[p]! + rise[p]!) / 2;
+  }
+}
+
+function hasMoved(slopes: Omit<Linearisation, 'factor'>, line: Linearisation): boolean {
+  for (const surface of ['side', 'front', 'back'] as const)
+    for (let k = 0; k < slopes[surface].length; k++) {
+      const ratio = slopes[surface][k]! / line[surface][k]!;
+      if (ratio > 1.2 || ratio < 0.8) return true;
+    }
+  return false;
 }
 
 /** Right-hand side with the difference between linearised and true surface flux, then one solve. */
@@ -115,12 +140,13 @@ function chordStep(
   return solveBanded(line.factor, right) as Float64Array<ArrayBuffer>;
 }
 
-function relinearise(
+/** dT/dtheta at every place of the barrel and the end faces. */
+function surfaceSlopes(
   conduction: RodConduction,
   boundary: BoundaryTemperatures,
   base: number,
   rise: Float64Array,
-): Linearisation {
+): Omit<Linearisation, 'factor'> {
   const { grid, law, side, front, back } = conduction;
   const { nr, nz, nRadial, nMount } = grid;
   const slopeAt = (links: Links, k: number, p: number, beyond: number) => {
@@ -128,7 +154,7 @@ function relinearise(
     return temperatureSlope(law, temperatureOf(law, base + rise[p]! - links.inner[k]! * flux));
   };
   const last = (nz - 1) * nRadial;
-  const slopes = {
+  return {
     side: Float64Array.from({ length: nz }, (_, j) => {
       const p = j * nRadial + nr - 1;
       return slopeAt(side, j, p, boundary.side + (nMount > 0 ? rise[p + 1]! : 0));
@@ -136,5 +162,4 @@ function relinearise(
     front: Float64Array.from({ length: nr }, (_, i) => slopeAt(front, i, i, boundary.front)),
     back: Float64Array.from({ length: nr }, (_, i) => slopeAt(back, i, last + i, boundary.back)),
   };
-  return { factor: factorWith(conduction.model, grid, conduction, slopes), ...slopes };
 }

@@ -1,5 +1,4 @@
-import { type RodField, type RodGrid, temperatureOf, temperatureSlope } from '../heat';
-import { barrelFlux } from '../heat/field';
+import { type RodField, type RodGrid, barrelFlux, temperatureOf, temperatureSlope } from '../heat';
 import type { LensGeometry } from './geometry';
 
 /**

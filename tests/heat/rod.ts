@@ -1,10 +1,10 @@
+import type { cellPresets } from '../../src/heat';
 import {
   type BoundaryTemperatures,
   type CellCount,
   type RodField,
   type RodHeatModel,
   assembleRod,
-  cellPresets,
   heatSource,
   makeRodGrid,
   solveRod,

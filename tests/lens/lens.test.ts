@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { cellPresets } from '../../src/heat';
+import type { cellPresets } from '../../src/heat';
 import {
   aberrationLoss,
   fitLens,
