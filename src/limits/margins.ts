@@ -13,12 +13,26 @@ export interface CoolerLimit {
 type Beam = Margin['beam'];
 
 /** A value that must stay below its bound; `room` is the distance from an untroubled state to the bound. */
-function below(limit: LimitName, beam: Beam, value: number, bound: number, unit: string, room: number): Margin {
+function below(
+  limit: LimitName,
+  beam: Beam,
+  value: number,
+  bound: number,
+  unit: string,
+  room: number,
+): Margin {
   const margin = bound - value;
   return { limit, beam, value, bound, unit, margin, share: margin / room, holds: margin >= 0 };
 }
 
-function above(limit: LimitName, beam: Beam, value: number, bound: number, unit: string, room: number): Margin {
+function above(
+  limit: LimitName,
+  beam: Beam,
+  value: number,
+  bound: number,
+  unit: string,
+  room: number,
+): Margin {
   const margin = value - bound;
   return { limit, beam, value, bound, unit, margin, share: margin / room, holds: margin >= 0 };
 }
@@ -38,25 +52,58 @@ function caseWindow(point: OperatingPoint, beam: Beam): Margin[] {
     : [below(limit, beam, caseTemperature, window.high!, 'K', Math.max(half, leastRoom))];
 }
 
-function pointMargins(point: OperatingPoint, beam: Beam, limits: Limits, cooler: readonly CoolerLimit[]): Margin[] {
+function pointMargins(
+  point: OperatingPoint,
+  beam: Beam,
+  limits: Limits,
+  cooler: readonly CoolerLimit[],
+): Margin[] {
   const room = (bound: number) => Math.max(Math.abs(bound - limits.ambient), leastRoom);
   const allowedStress = limits.fractureStrength / limits.fractureSafetyFactor;
   const { rod, stress, diode } = point;
   const coldest = Math.min(point.cooler.coldestTemperature, rod.baseTemperature, diode.caseTemperature);
   const dew = point.cooler.dewPoint + limits.dewPointGuard;
   const margins = [
-    below('rod peak temperature', beam, rod.peakTemperature, limits.rodPeakTemperature, 'K', room(limits.rodPeakTemperature)),
+    below(
+      'rod peak temperature',
+      beam,
+      rod.peakTemperature,
+      limits.rodPeakTemperature,
+      'K',
+      room(limits.rodPeakTemperature),
+    ),
     below('fracture stress', beam, stress.peakTensile, allowedStress, 'Pa', allowedStress),
     ...caseWindow(point, beam),
-    below('diode case temperature', beam, diode.caseTemperature, limits.highestCaseTemperature, 'K', room(limits.highestCaseTemperature)),
+    below(
+      'diode case temperature',
+      beam,
+      diode.caseTemperature,
+      limits.highestCaseTemperature,
+      'K',
+      room(limits.highestCaseTemperature),
+    ),
     above('dew point', beam, coldest, dew, 'K', room(dew)),
-    ...cooler.map((item) => below(item.limit, beam, item.value, item.bound, item.unit, Math.abs(item.bound) || 1)),
+    ...cooler.map((item) =>
+      below(item.limit, beam, item.value, item.bound, item.unit, Math.abs(item.bound) || 1),
+    ),
   ];
   if (beam === 'lasing') {
-    const worst = Math.max(Math.abs(point.cavity.sagittal.stability), Math.abs(point.cavity.tangential.stability));
+    const worst = Math.max(
+      Math.abs(point.cavity.sagittal.stability),
+      Math.abs(point.cavity.tangential.stability),
+    );
     const bound = 1 - limits.stabilityMargin;
     margins.push(below('cavity stability', beam, worst, bound, '1', bound));
-    margins.push(below('aberration loss', beam, point.lens.aberrationLoss, limits.aberrationLoss, '1', limits.aberrationLoss));
+    margins.push(
+      below(
+        'aberration loss',
+        beam,
+        point.lens.aberrationLoss,
+        limits.aberrationLoss,
+        '1',
+        limits.aberrationLoss,
+      ),
+    );
   }
   return margins;
 }
@@ -77,7 +124,14 @@ export function marginsOf(lasing: PointWithLimits, blocked: PointWithLimits, lim
   const exists = Math.min(...steady);
   const beam: Beam = steady[0] === 0 ? 'lasing' : 'blocked';
   const state: Margin = {
-    limit: 'steady state', beam, value: exists, bound: 1, unit: '1', margin: exists - 1 + (exists === 1 ? 1 : 0), share: exists === 1 ? 1 : -1, holds: exists === 1,
+    limit: 'steady state',
+    beam,
+    value: exists,
+    bound: 1,
+    unit: '1',
+    margin: exists - 1 + (exists === 1 ? 1 : 0),
+    share: exists === 1 ? 1 : -1,
+    holds: exists === 1,
   };
   if (exists === 0) return [state];
   const worst = new Map<LimitName, Margin>();

@@ -7,7 +7,12 @@ import { axialDeposit, channelsAt, type PreparedAbsorption } from '../pump';
  * @param wavelength of the diode, m
  * @returns length nz, zero in the end caps; its sum is the absorbed share
  */
-export function depositAt(resolved: ResolvedDesign, grid: RodGrid, absorption: PreparedAbsorption, wavelength: number): Float64Array {
+export function depositAt(
+  resolved: ResolvedDesign,
+  grid: RodGrid,
+  absorption: PreparedAbsorption,
+  wavelength: number,
+): Float64Array {
   const { pump } = resolved;
   const deposit = new Float64Array(grid.nz);
   const doped = deposit.subarray(grid.dopedFrom, grid.dopedTo);

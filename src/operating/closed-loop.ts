@@ -1,7 +1,7 @@
 import type { ResolvedCooler } from '../design/resolved';
 import { diodeWavelength } from '../pump';
 import { findRoot } from '../numerics/root';
-import { depositAt, sumOf } from './absorbed';
+import { sumOf } from './absorbed';
 import { overlapRings, type PreparedDesign } from './prepare';
 import { lase, splitPower, type LaserState, type PowerSplit } from './rod-laser';
 
@@ -46,7 +46,8 @@ function caseTemperatureAt(prepared: PreparedDesign, question: Question, baseTem
   const { diode, surroundings } = prepared.resolved;
   if (diode.caseTemperature !== null) return diode.caseTemperature;
   const heat = diodeHeatOf(prepared, question.pumpPower);
-  const under = diode.circuit === 'shared' ? baseTemperature : question.cooler.cooler.baseTemperature(heat, surroundings);
+  const under =
+    diode.circuit === 'shared' ? baseTemperature : question.cooler.cooler.baseTemperature(heat, surroundings);
   return under + diode.caseToBase * heat;
 }
 
@@ -57,12 +58,22 @@ function caseTemperatureAt(prepared: PreparedDesign, question: Question, baseTem
 export type RodTemperature = (deposit: Float64Array, heatLoad: number, mountTemperature: number) => number;
 
 /** Follows the chain once, from a base temperature all the way to the heat on the base. */
-export function follow(prepared: PreparedDesign, question: Question, baseTemperature: number, rodTemperature: RodTemperature): LoopState {
-  const { resolved, grid, absorption, baseHeat: response } = prepared;
+export function follow(
+  prepared: PreparedDesign,
+  question: Question,
+  baseTemperature: number,
+  rodTemperature: RodTemperature,
+): LoopState {
+  const { resolved, deposits, baseHeat: response } = prepared;
   const { pump, surroundings, diode, mount } = resolved;
   const caseTemperature = caseTemperatureAt(prepared, question, baseTemperature);
-  const wavelength = diodeWavelength(pump.wavelength, pump.drift, caseTemperature, pump.referenceCaseTemperature);
-  const deposit = depositAt(resolved, grid, absorption, wavelength);
+  const wavelength = diodeWavelength(
+    pump.wavelength,
+    pump.drift,
+    caseTemperature,
+    pump.referenceCaseTemperature,
+  );
+  const deposit = deposits.at(wavelength);
   const arriving = question.pumpPower * pump.entranceTransmission;
   const clipped = arriving * prepared.pump.clipped;
   const enteringPower = arriving - clipped;
@@ -88,7 +99,11 @@ export function follow(prepared: PreparedDesign, question: Question, baseTempera
         rodTemperature: rodTemperature(deposit, absorbedPower * split.heat, mountTemperature),
         rings,
       };
-      split = splitPower(resolved, wavelength, lase(resolved, state, resolved.cavity.lensRadius, 0).extraction);
+      split = splitPower(
+        resolved,
+        wavelength,
+        lase(resolved, state, resolved.cavity.lensRadius, 0).extraction,
+      );
       mountHeat = mountFrom(split.heat);
     }
   }
@@ -115,7 +130,10 @@ export interface LoopResult {
 
 /** Base temperature that the cooler would settle at for the heat of a state, above the state's own, K. */
 const imbalance = (prepared: PreparedDesign, question: Question, state: LoopState): number =>
-  Math.min(question.cooler.cooler.baseTemperature(state.baseHeat, prepared.resolved.surroundings), 4 * hottestBase) - state.baseTemperature;
+  Math.min(
+    question.cooler.cooler.baseTemperature(state.baseHeat, prepared.resolved.surroundings),
+    4 * hottestBase,
+  ) - state.baseTemperature;
 
 /**
  * Steady state of the whole chain: the base temperature at which the cooler takes just the heat that arrives.
@@ -123,7 +141,12 @@ const imbalance = (prepared: PreparedDesign, question: Question, state: LoopStat
  * @param start base temperature to begin at, K; the last one of a sweep saves steps
  * @returns the state; not converged means that no base below 700 K takes the heat: there is no steady state
  */
-export function closeLoop(prepared: PreparedDesign, question: Question, start: number, rodTemperature: RodTemperature): LoopResult {
+export function closeLoop(
+  prepared: PreparedDesign,
+  question: Question,
+  start: number,
+  rodTemperature: RodTemperature,
+): LoopResult {
   const at = (base: number) => follow(prepared, question, base, rodTemperature);
   let state = at(start);
   let gap = imbalance(prepared, question, state);
@@ -160,10 +183,15 @@ const stateSamples = 48;
  * hysteresis: which one the laser settles in depends on where it comes from.
  * @returns ascending, K; empty where the cooler finds no balance below 700 K
  */
-export function stableBases(prepared: PreparedDesign, question: Question, rodTemperature: RodTemperature): number[] {
+export function stableBases(
+  prepared: PreparedDesign,
+  question: Question,
+  rodTemperature: RodTemperature,
+): number[] {
   const { cooler } = question.cooler;
   const { surroundings } = prepared.resolved;
-  const gap = (base: number) => imbalance(prepared, question, follow(prepared, question, base, rodTemperature));
+  const gap = (base: number) =>
+    imbalance(prepared, question, follow(prepared, question, base, rodTemperature));
   const low = Math.min(cooler.baseTemperature(0, surroundings), surroundings.ambient) - 5;
   const most = 2 * (diodeHeatOf(prepared, question.pumpPower) + question.pumpPower);
   const high = Math.min(hottestBase, Math.max(cooler.baseTemperature(most, surroundings), low + 20) + 5);
@@ -173,7 +201,13 @@ export function stableBases(prepared: PreparedDesign, question: Question, rodTem
     const base = low + ((high - low) * k) / stateSamples;
     const after = gap(base);
     if (before > 0 && after <= 0)
-      found.push(findRoot(gap, low + ((high - low) * (k - 1)) / stateSamples, base, { tolerance: 1e-4, fa: before, fb: after }));
+      found.push(
+        findRoot(gap, low + ((high - low) * (k - 1)) / stateSamples, base, {
+          tolerance: 1e-4,
+          fa: before,
+          fb: after,
+        }),
+      );
     before = after;
   }
   return found;

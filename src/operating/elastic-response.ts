@@ -1,29 +1,51 @@
 import type { ResolvedDesign } from '../design/resolved';
-import { assembleElastic, bulgePower, curvatureWeights, makeElasticMesh, peakTensile, solveElastic, temperatureMap, type PlacedValue, type StressField } from '../elastic';
-import { heatSource, solveRod, type RodConduction } from '../heat';
+import {
+  assembleElastic,
+  bulgePower,
+  curvatureWeights,
+  elasticPresets,
+  makeElasticMesh,
+  peakTensile,
+  rodTemperature,
+  rodTemperatureMap,
+  solveElastic,
+  type PlacedValue,
+  type StressField,
+} from '../elastic';
+import { heatSource, solveRod, type RodConduction, type RodGrid } from '../heat';
 import { sumOf } from './absorbed';
 import type { PumpSpread } from './prepare';
 
-/** Elements across and along the rod: face bulge within 0.5 % and stress within 1 % of converged solutions. */
-const elements = { radial: 9, axial: 14 };
+/** Stretches of the doped part whose heat is answered one by one, where its spread along the rod can change. */
+const mostStretches = 8;
 
-/** Stress and bulge per watt of heat, for one way the heat lies along the rod. */
+/** Stiffness and maps, which depend on the rod alone. */
+interface ElasticBase {
+  key: string;
+  assembled: ReturnType<typeof assembleElastic>;
+  map: ReturnType<typeof rodTemperatureMap>;
+  weights: Float64Array;
+}
+
+/** Stress and bulge per watt of heat in one stretch of the rod. */
 interface Column {
-  stress: Float64Array[];
+  /** Radial, hoop, axial, shear at node n at 4 n. */
+  stress: Float64Array;
   front: number;
   back: number;
 }
 
 /**
- * Stress and face bulge as linear answers to the heat of each axial cell, solved once per design. Stress does not
- * depend on the level of the temperature, so base and air temperature do not enter (the few milliwatts through the
- * end faces' film are part of each cell's own answer).
+ * Stress and face bulge as linear answers to the heat of each stretch of the rod, solved once per design. Inside a
+ * stretch the heat keeps the spread it has at the diode's nominal wavelength. Stress does not depend on the level of
+ * the temperature, so base and air temperature do not enter; what the faces lose to the air is part of each answer.
  */
 export interface ElasticResponse {
+  base: ElasticBase;
   mesh: StressField['mesh'];
-  /** One column for each doped cell, or a single one where the heat always lies the same way along the rod. */
   columns: Column[];
-  dopedFrom: number;
+  /** First axial cell of each stretch, and the end of the last. */
+  starts: number[];
 }
 
 export interface ElasticState {
@@ -33,63 +55,128 @@ export interface ElasticState {
   back: number;
 }
 
-function column(resolved: ResolvedDesign, assembled: ReturnType<typeof assembleElastic>, conduction: RodConduction, pump: PumpSpread, deposit: Float64Array, map: ReturnType<typeof temperatureMap>, weights: Float64Array): Column {
-  const source = heatSource(conduction.grid, pump.heatShares, deposit, 1);
-  const field = solveRod(conduction, source, { side: 0, front: 0, back: 0 });
-  const solution = solveElastic(assembled, { map, values: field.temperatures });
-  const bulge = bulgePower(solution.displacement, resolved.rod.refractiveIndex, weights);
-  return { stress: [solution.radial, solution.hoop, solution.axial, solution.shear], ...bulge };
-}
-
-/** @param steady share of the heat of each axial cell where it never changes; left out, every cell gets its own column */
-export function prepareElastic(resolved: ResolvedDesign, conduction: RodConduction, pump: PumpSpread, steady?: Float64Array): ElasticResponse {
-  const { rod, cavity } = resolved;
+function elasticBase(resolved: ResolvedDesign, conduction: RodConduction): ElasticBase {
   const { grid } = conduction;
+  const { rod, cavity, pump } = resolved;
   const mesh = makeElasticMesh({
     radius: rod.radius,
     length: rod.frontCap + rod.dopedLength + rod.backCap,
     heatedFrom: rod.frontCap,
     heatedTo: rod.frontCap + rod.dopedLength,
-    pumpRadius: resolved.pump.radius,
-    radialElements: elements.radial,
-    axialElements: elements.axial,
+    pumpRadius: pump.radius,
+    ...elasticPresets.study,
   });
-  const constants = { youngsModulus: rod.youngModulus, poissonRatio: rod.poissonRatio, expansion: rod.expansionAcross, axialExpansion: rod.expansion };
+  const constants = {
+    youngsModulus: rod.youngModulus,
+    poissonRatio: rod.poissonRatio,
+    expansion: rod.expansionAcross,
+    axialExpansion: rod.expansion,
+  };
   const assembled = assembleElastic({ constants, referenceTemperature: 0, barrel: { kind: 'free' } }, mesh);
-  const map = temperatureMap(assembled, grid.radialCentres, grid.axialCentres, grid.nRadial);
-  const weights = curvatureWeights(mesh, cavity.lensRadius);
-  const shapes: Float64Array[] = [];
-  if (steady) shapes.push(steady.map((share) => share / (sumOf(steady) || 1)));
-  else
-    for (let j = grid.dopedFrom; j < grid.dopedTo; j++) {
-      const shape = new Float64Array(grid.nz);
-      shape[j] = 1;
-      shapes.push(shape);
-    }
-  const columns = shapes.map((shape) => column(resolved, assembled, conduction, pump, shape, map, weights));
-  return { mesh, columns, dopedFrom: grid.dopedFrom };
+  return {
+    key: keyOf(resolved, grid),
+    assembled,
+    map: rodTemperatureMap(assembled, conduction),
+    weights: curvatureWeights(mesh, cavity.lensRadius),
+  };
 }
 
-/** Adds up the columns for the heat of each axial cell, W. */
-export function elasticState(response: ElasticResponse, heat: Float64Array): ElasticState {
-  const { columns, dopedFrom, mesh } = response;
-  const single = columns.length === 1;
-  const total = single ? sumOf(heat) : 0;
-  const nodes = columns[0]!.stress[0]!.length;
-  const sum = [0, 1, 2, 3].map(() => new Float64Array(nodes)) as [Float64Array, Float64Array, Float64Array, Float64Array];
+/** What the stiffness, its mesh and its maps depend on. */
+function keyOf({ rod, pump, cavity }: ResolvedDesign, grid: RodGrid): string {
+  const { radius, frontCap, dopedLength, backCap, youngModulus, poissonRatio, expansion, expansionAcross } =
+    rod;
+  const places = [grid.nRadial, ...grid.radialCentres, ...grid.axialCentres];
+  return [
+    radius,
+    frontCap,
+    dopedLength,
+    backCap,
+    youngModulus,
+    poissonRatio,
+    expansion,
+    expansionAcross,
+    pump.radius,
+    cavity.lensRadius,
+    rod.conductivityAxial,
+    rod.faceFilm,
+    ...places,
+  ].join();
+}
+
+function stretches(grid: RodGrid, held: boolean): number[] {
+  const cells = grid.dopedTo - grid.dopedFrom;
+  const count = held ? 1 : Math.min(mostStretches, cells);
+  return Array.from({ length: count + 1 }, (_, k) => grid.dopedFrom + Math.round((cells * k) / count));
+}
+
+function columnOf(
+  base: ElasticBase,
+  index: number,
+  conduction: RodConduction,
+  pump: PumpSpread,
+  deposit: Float64Array,
+): Column {
+  const source = heatSource(conduction.grid, pump.heatShares, deposit, 1);
+  const field = solveRod(conduction, source, { side: 0, front: 0, back: 0 });
+  const solution = solveElastic(base.assembled, rodTemperature(base.map, field));
+  const { radial, hoop, axial, shear } = solution;
+  const stress = new Float64Array(4 * radial.length);
+  for (let n = 0; n < radial.length; n++) {
+    stress[4 * n] = radial[n]!;
+    stress[4 * n + 1] = hoop[n]!;
+    stress[4 * n + 2] = axial[n]!;
+    stress[4 * n + 3] = shear[n]!;
+  }
+  return { stress, ...bulgePower(solution.displacement, index, base.weights) };
+}
+
+/**
+ * @param nominal share of the light that each axial cell absorbs at the diode's nominal wavelength
+ * @param held whether the heat always lies along the rod as it does there
+ * @param like a response whose stiffness may be used again where the rod is the same
+ */
+export function prepareElastic(
+  resolved: ResolvedDesign,
+  conduction: RodConduction,
+  pump: PumpSpread,
+  nominal: Float64Array,
+  held: boolean,
+  like?: ElasticResponse,
+): ElasticResponse {
+  const { grid } = conduction;
+  const base =
+    like && like.base.key === keyOf(resolved, grid) ? like.base : elasticBase(resolved, conduction);
+  const starts = stretches(grid, held);
+  const columns = starts.slice(1).map((end, k) => {
+    const part = new Float64Array(grid.nz);
+    const from = starts[k]!;
+    const total = sumOf(nominal.subarray(from, end));
+    for (let j = from; j < end; j++) part[j] = total > 0 ? nominal[j]! / total : 1 / (end - from);
+    return columnOf(base, resolved.rod.refractiveIndex, conduction, pump, part);
+  });
+  return { base, mesh: base.assembled.mesh, columns, starts };
+}
+
+/** Adds up the answers for the heat of each axial cell, W. */
+export function elasticState({ columns, starts, mesh }: ElasticResponse, heat: Float64Array): ElasticState {
+  const size = columns[0]!.stress.length;
+  const sum = new Float64Array(size);
   let front = 0;
   let back = 0;
-  columns.forEach((item, k) => {
-    const weight = single ? total : heat[dopedFrom + k]!;
-    if (weight === 0) return;
-    front += weight * item.front;
-    back += weight * item.back;
-    for (let c = 0; c < 4; c++) {
-      const from = item.stress[c]!;
-      const to = sum[c]!;
-      for (let n = 0; n < nodes; n++) to[n] = to[n]! + weight * from[n]!;
-    }
-  });
-  const [radial, hoop, axial, shear] = sum;
-  return { peakTensile: peakTensile({ mesh, radial, hoop, axial, shear, surfaceResidual: 0 }), front, back };
+  for (let k = 0; k < columns.length; k++) {
+    const { stress, front: ofFront, back: ofBack } = columns[k]!;
+    let weight = 0;
+    for (let j = starts[k]!; j < starts[k + 1]!; j++) weight += heat[j]!;
+    front += weight * ofFront;
+    back += weight * ofBack;
+    for (let n = 0; n < size; n++) sum[n] = sum[n]! + weight * stress[n]!;
+  }
+  const nodes = size / 4;
+  const pick = (offset: number) => {
+    const values = new Float64Array(nodes);
+    for (let n = 0; n < nodes; n++) values[n] = sum[4 * n + offset]!;
+    return values;
+  };
+  const field = { mesh, radial: pick(0), hoop: pick(1), axial: pick(2), shear: pick(3), surfaceResidual: 0 };
+  return { peakTensile: peakTensile(field), front, back };
 }

@@ -18,17 +18,27 @@ function diodeFlows(prepared: PreparedDesign, diodeHeat: number, separate: Coole
   const own: Flow = { from: 'diode', to: 'diode base', power: diodeHeat };
   if (!separate) return [{ ...own, to: 'diode cooler' }];
   const rename = (node: string) => (node === 'wall plug' || node === 'surroundings' ? node : `diode ${node}`);
-  return [own, ...separate.flows.map(({ from, to, power }) => ({ from: rename(from), to: rename(to), power }))];
+  return [
+    own,
+    ...separate.flows.map(({ from, to, power }) => ({ from: rename(from), to: rename(to), power })),
+  ];
 }
 
 /** Turns a negative flow round, so that every arrow points the way the power goes. */
-const upright = ({ from, to, power }: Flow): Flow => (power < 0 ? { from: to, to: from, power: -power } : { from, to, power });
+const upright = ({ from, to, power }: Flow): Flow =>
+  power < 0 ? { from: to, to: from, power: -power } : { from, to, power };
 
 /**
  * Where every watt goes, from the wall plug to the surroundings. Every node but the first and the last gives what it
  * takes; what is radiated as light, output included, ends at a node of its own.
  */
-export function ledgerOf(prepared: PreparedDesign, loop: LoopState, cooler: CoolerState, separate: CoolerState | null, input: LedgerInput): Flow[] {
+export function ledgerOf(
+  prepared: PreparedDesign,
+  loop: LoopState,
+  cooler: CoolerState,
+  separate: CoolerState | null,
+  input: LedgerInput,
+): Flow[] {
   const { pump } = prepared.resolved;
   const arriving = input.pumpPower * pump.entranceTransmission;
   const clipped = arriving * prepared.pump.clipped;

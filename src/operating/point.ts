@@ -1,7 +1,14 @@
 import { planeMode } from '../cavity';
 import { dewPoint, type CoolerLimit, type CoolerState } from '../cooling';
 import { heatSource, meanWithin, solveRod, type RodField } from '../heat';
-import { closeLoop, diodeHeatOf, stableBases, type LoopState, type Question, type RodTemperature } from './closed-loop';
+import {
+  closeLoop,
+  diodeHeatOf,
+  stableBases,
+  type LoopState,
+  type Question,
+  type RodTemperature,
+} from './closed-loop';
 import { elasticState } from './elastic-response';
 import { ledgerOf } from './ledger';
 import { overlapRings, type PreparedDesign } from './prepare';
@@ -38,21 +45,33 @@ function rodTemperatureOf(prepared: PreparedDesign): RodTemperature {
     const absorbed = deposit.reduce((sum, share) => sum + share, 0) || 1;
     const source = heatSource(grid, pump.heatShares, deposit, heatLoad / absorbed / inside);
     const { ambient } = resolved.surroundings;
-    return meanWithin(solveRod(conduction, source, { side: mountTemperature, front: ambient, back: ambient }), resolved.pump.radius);
+    return meanWithin(
+      solveRod(conduction, source, { side: mountTemperature, front: ambient, back: ambient }),
+      resolved.pump.radius,
+    );
   };
 }
 
 /** Geometric mean of the mode radii of both planes, m; null where a plane has no mode. */
-const meanRadius = (a: number | null, b: number | null) => (a === null || b === null ? null : Math.sqrt(a * b));
+const meanRadius = (a: number | null, b: number | null) =>
+  a === null || b === null ? null : Math.sqrt(a * b);
 
 interface Output {
   power: number;
   threshold: number | null;
 }
 
-function outputOf(prepared: PreparedDesign, question: Question, loop: LoopState, field: RodField, lens: RodLens, modeRadius: number | null): Output {
+function outputOf(
+  prepared: PreparedDesign,
+  question: Question,
+  loop: LoopState,
+  field: RodField,
+  lens: RodLens,
+  modeRadius: number | null,
+): Output {
   const { resolved } = prepared;
-  if (question.beam === 'blocked' || modeRadius === null || loop.absorbedPower <= 0) return { power: 0, threshold: null };
+  if (question.beam === 'blocked' || modeRadius === null || loop.absorbedPower <= 0)
+    return { power: 0, threshold: null };
   const state = {
     absorbedPower: loop.absorbedPower,
     pumpWavelength: loop.wavelength,
@@ -77,10 +96,18 @@ export function solvePoint(prepared: PreparedDesign, question: Question, start?:
   const { resolved } = prepared;
   const { surroundings, rod, limits } = resolved;
   const { pumpPower } = question;
-  const { state: loop, converged } = closeLoop(prepared, question, start ?? surroundings.ambient + 10, rodTemperatureOf(prepared));
+  const { state: loop, converged } = closeLoop(
+    prepared,
+    question,
+    start ?? surroundings.ambient + 10,
+    rodTemperatureOf(prepared),
+  );
   const cooler = question.cooler.cooler.settle(loop.baseHeat, surroundings);
   const diodeHeat = diodeHeatOf(prepared, pumpPower);
-  const separate = resolved.diode.circuit === 'separate' && resolved.diode.caseTemperature === null ? question.cooler.cooler.settle(diodeHeat, surroundings) : null;
+  const separate =
+    resolved.diode.circuit === 'separate' && resolved.diode.caseTemperature === null
+      ? question.cooler.cooler.settle(diodeHeat, surroundings)
+      : null;
   const { field, cellHeat } = fieldOf(prepared, loop);
   const elastic = elasticState(prepared.elastic, cellHeat);
   const lens = rodLens(resolved, prepared.lens, field, elastic);
@@ -89,8 +116,16 @@ export function solvePoint(prepared: PreparedDesign, question: Question, start?:
   const modeRadius = meanRadius(sagittal.modeRadiusInRod, tangential.modeRadiusInRod);
   const output = outputOf(prepared, question, loop, field, lens, modeRadius);
   const steady = converged && cooler.state === 'steady' && (separate === null || separate.state === 'steady');
-  const reason = cooler.reason ?? separate?.reason ?? (converged ? undefined : 'no base temperature below 700 K takes this heat');
-  const ledger = ledgerOf(prepared, loop, cooler, separate, { pumpPower, outputPower: output.power, toAir: loop.heatLoad - loop.mountHeat, diodeHeat });
+  const reason =
+    cooler.reason ??
+    separate?.reason ??
+    (converged ? undefined : 'no base temperature below 700 K takes this heat');
+  const ledger = ledgerOf(prepared, loop, cooler, separate, {
+    pumpPower,
+    outputPower: output.power,
+    toAir: loop.heatLoad - loop.mountHeat,
+    diodeHeat,
+  });
   const meanPumped = meanWithin(field, resolved.pump.radius);
   const allowed = limits.fractureStrength;
   const point: OperatingPoint = {
@@ -128,13 +163,25 @@ export function solvePoint(prepared: PreparedDesign, question: Question, start?:
       estimate: lens.estimate,
     },
     cavity: {
-      sagittal: { stability: sagittal.stability, stable: sagittal.stable, modeRadiusInRod: sagittal.modeRadiusInRod },
-      tangential: { stability: tangential.stability, stable: tangential.stable, modeRadiusInRod: tangential.modeRadiusInRod },
+      sagittal: {
+        stability: sagittal.stability,
+        stable: sagittal.stable,
+        modeRadiusInRod: sagittal.modeRadiusInRod,
+      },
+      tangential: {
+        stability: tangential.stability,
+        stable: tangential.stable,
+        modeRadiusInRod: tangential.modeRadiusInRod,
+      },
     },
     diode: {
       caseTemperature: loop.caseTemperature,
       wavelength: loop.wavelength,
-      caseWindow: { low: prepared.caseWindow.low, high: prepared.caseWindow.high, best: prepared.caseWindow.best },
+      caseWindow: {
+        low: prepared.caseWindow.low,
+        high: prepared.caseWindow.high,
+        best: prepared.caseWindow.best,
+      },
       heat: diodeHeat,
     },
     cooler: {

@@ -1,9 +1,26 @@
 import { prepareCavity, type PreparedCavity } from '../cavity';
 import type { ResolvedDesign } from '../design/resolved';
-import { assembleRod, makeRodGrid, solveRod, type GridWish, type RodConduction, type RodGrid, type RodHeatModel } from '../heat';
+import {
+  assembleRod,
+  makeRodGrid,
+  solveRod,
+  type GridWish,
+  type RodConduction,
+  type RodGrid,
+  type RodHeatModel,
+} from '../heat';
 import { combineRings, overlapFaces } from '../laser';
-import { beamRadii, beamRadius, caseWindow, channelsAt, prepareAbsorption, ringShares, type CaseWindow, type FocusedBeam, type PreparedAbsorption } from '../pump';
-import { depositAt } from './absorbed';
+import {
+  beamRadii,
+  beamRadius,
+  caseWindow,
+  channelsAt,
+  prepareAbsorption,
+  ringShares,
+  type CaseWindow,
+  type FocusedBeam,
+} from '../pump';
+import { DepositTable } from './deposit-table';
 import { prepareElastic, type ElasticResponse } from './elastic-response';
 import { prepareLens, type PreparedLens } from './rod-lens';
 
@@ -35,7 +52,7 @@ export interface PreparedDesign {
   grid: RodGrid;
   conduction: RodConduction;
   pump: PumpSpread;
-  absorption: PreparedAbsorption;
+  deposits: DepositTable;
   /** Whether absorption depends on the diode's wavelength at all. */
   drifts: boolean;
   caseWindow: CaseWindow;
@@ -46,7 +63,8 @@ export interface PreparedDesign {
 }
 
 function heatModel({ rod, mount }: ResolvedDesign): RodHeatModel {
-  const end = rod.faceFilm > 0 ? { kind: 'film' as const, coefficient: rod.faceFilm } : { kind: 'insulated' as const };
+  const end =
+    rod.faceFilm > 0 ? { kind: 'film' as const, coefficient: rod.faceFilm } : { kind: 'insulated' as const };
   return {
     radius: rod.radius,
     frontCap: rod.frontCap,
@@ -72,9 +90,15 @@ function spreadOf(resolved: ResolvedDesign, grid: RodGrid, beam: FocusedBeam): P
   const finer = overlapFaces(pump.profile, radii, rod.radius, 16);
   const heatShares = ringShares(pump.profile, grid.radialFaces, radii);
   const middle = (grid.dopedFrom + grid.dopedTo) >> 1;
-  const row = heatShares.length > grid.nr ? heatShares.subarray(middle * grid.nr, (middle + 1) * grid.nr) : heatShares;
+  const row =
+    heatShares.length > grid.nr ? heatShares.subarray(middle * grid.nr, (middle + 1) * grid.nr) : heatShares;
   const inside = row.reduce((sum, share) => sum + share, 0);
-  return { heatShares, overlapFaces: finer, overlapShares: ringShares(pump.profile, finer, radii), clipped: 1 - inside };
+  return {
+    heatShares,
+    overlapFaces: finer,
+    overlapShares: ringShares(pump.profile, finer, radii),
+    clipped: 1 - inside,
+  };
 }
 
 /** Reads the heat share from the field that a base one kelvin above the air makes: conduction is reciprocal. */
@@ -91,7 +115,9 @@ function baseHeatOf(conduction: RodConduction, pump: PumpSpread): BaseHeat {
 }
 
 function wavelengthRange({ pump }: ResolvedDesign): { from: number; to: number } {
-  const ends = [caseSearch.from - 60, caseSearch.to + 200].map((temperature) => pump.wavelength + pump.drift * (temperature - pump.referenceCaseTemperature));
+  const ends = [caseSearch.from - 60, caseSearch.to + 200].map(
+    (temperature) => pump.wavelength + pump.drift * (temperature - pump.referenceCaseTemperature),
+  );
   return { from: Math.min(...ends), to: Math.max(...ends) };
 }
 
@@ -115,13 +141,27 @@ function windowOf(resolved: ResolvedDesign): CaseWindow {
 /**
  * Factors conduction and elasticity, multiplies up the cavity and spreads the pump, once for a design.
  * @param cells grid of the rod; 'standard' serves every study
+ * @param like a prepared design whose stiffness is used again where the rod is the same
  */
-export function prepareDesign(resolved: ResolvedDesign, cells: GridWish['cells'] = 'standard'): PreparedDesign {
+export function prepareDesign(
+  resolved: ResolvedDesign,
+  cells: GridWish['cells'] = 'standard',
+  like?: PreparedDesign,
+): PreparedDesign {
   const { pump, rod } = resolved;
   const model = heatModel(resolved);
   const range = wavelengthRange(resolved);
-  const absorption = prepareAbsorption(pump.linewidth, pump.polarisationShares, rod.absorption, range.from, range.to);
-  const strongest = channelsAt(absorption, pump.wavelength).reduce((most, channel) => Math.max(most, channel.absorptionCoefficient), 0);
+  const absorption = prepareAbsorption(
+    pump.linewidth,
+    pump.polarisationShares,
+    rod.absorption,
+    range.from,
+    range.to,
+  );
+  const strongest = channelsAt(absorption, pump.wavelength).reduce(
+    (most, channel) => Math.max(most, channel.absorptionCoefficient),
+    0,
+  );
   const beam: FocusedBeam = {
     waistRadius: pump.radius,
     waistPosition: pump.waistPosition,
@@ -129,22 +169,38 @@ export function prepareDesign(resolved: ResolvedDesign, cells: GridWish['cells']
     wavelength: pump.wavelength,
     refractiveIndex: rod.refractiveIndex,
   };
-  const narrowest = Math.min(...[rod.frontCap, rod.frontCap + rod.dopedLength].map((z) => beamRadius(z, beam)), pump.radius);
-  const grid = makeRodGrid(model, { pumpRadius: Math.min(narrowest, 0.9 * rod.radius), absorptionCoefficient: strongest, cells, bothEnds: pump.passes === 2 });
+  const narrowest = Math.min(
+    ...[rod.frontCap, rod.frontCap + rod.dopedLength].map((z) => beamRadius(z, beam)),
+    pump.radius,
+  );
+  const grid = makeRodGrid(model, {
+    pumpRadius: Math.min(narrowest, 0.9 * rod.radius),
+    absorptionCoefficient: strongest,
+    cells,
+    bothEnds: pump.passes === 2,
+  });
   const conduction = assembleRod(model, grid);
   const spread = spreadOf(resolved, grid, beam);
   const drifts = rod.absorption.kind !== 'coefficient';
+  const deposits = new DepositTable(resolved, grid, absorption);
   return {
     resolved,
     model,
     grid,
     conduction,
     pump: spread,
-    absorption,
+    deposits,
     drifts,
     caseWindow: windowOf(resolved),
     baseHeat: baseHeatOf(conduction, spread),
-    elastic: prepareElastic(resolved, conduction, spread, drifts ? undefined : depositAt(resolved, grid, absorption, pump.wavelength)),
+    elastic: prepareElastic(
+      resolved,
+      conduction,
+      spread,
+      deposits.at(pump.wavelength),
+      !drifts,
+      like?.elastic,
+    ),
     lens: prepareLens(resolved, grid),
     cavity: prepareCavity(resolved.cavity),
   };

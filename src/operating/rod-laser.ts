@@ -1,5 +1,13 @@
 import type { ResolvedDesign } from '../design/resolved';
-import { boltzmannShare, fluorescenceFraction, heatFraction, laserOutput, quantumDefect, type LaserOutput, type PumpRings } from '../laser';
+import {
+  boltzmannShare,
+  fluorescenceFraction,
+  heatFraction,
+  laserOutput,
+  quantumDefect,
+  type LaserOutput,
+  type PumpRings,
+} from '../laser';
 import { sumOf } from './absorbed';
 
 /** Where the absorbed power goes, as shares of it; they sum to 1. */
@@ -25,11 +33,17 @@ export interface LaserState {
  * @param modeRadius 1/e2 radius of the mode in the rod, m
  * @param extraLoss round-trip loss beyond the design's, such as that of aberration
  */
-export function lase(resolved: ResolvedDesign, state: LaserState, modeRadius: number, extraLoss: number): LaserOutput {
+export function lase(
+  resolved: ResolvedDesign,
+  state: LaserState,
+  modeRadius: number,
+  extraLoss: number,
+): LaserOutput {
   const { rod, cavity } = resolved;
   const { laser } = rod;
   const { thermal } = laser;
-  const otherLoss = 1 - (1 - cavity.passiveLoss) * (1 - cavity.otherTransmission) * (1 - Math.min(extraLoss, 1));
+  const otherLoss =
+    1 - (1 - cavity.passiveLoss) * (1 - cavity.otherTransmission) * (1 - Math.min(extraLoss, 1));
   return laserOutput({
     absorbedPower: state.absorbedPower,
     pumpWavelength: state.pumpWavelength,
@@ -68,7 +82,8 @@ export function splitPower(resolved: ResolvedDesign, pumpWavelength: number, ext
   };
   const stimulated = (extraction * pumpWavelength) / laser.wavelength;
   const rule = rod.heatFraction;
-  if (rule.kind === 'from laser') return { heat: heatFraction(input), fluorescence: fluorescenceFraction(input), stimulated };
+  if (rule.kind === 'from laser')
+    return { heat: heatFraction(input), fluorescence: fluorescenceFraction(input), stimulated };
   const heat =
     rule.kind === 'quantum defect'
       ? quantumDefect(pumpWavelength, laser.wavelength)

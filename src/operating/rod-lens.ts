@@ -1,7 +1,17 @@
 import type { RodOptics } from '../cavity';
 import type { ResolvedDesign } from '../design/resolved';
 import type { RodField, RodGrid } from '../heat';
-import { aberrationLoss, fitLens, fitProfile, opticalPathProfile, planeStressBulge, prepareLens as prepareGeometry, weighLens, type LensGeometry, type LensWeights } from '../lens';
+import {
+  aberrationLoss,
+  fitLens,
+  fitProfile,
+  opticalPathProfile,
+  planeStressBulge,
+  prepareLens as prepareGeometry,
+  weighLens,
+  type LensGeometry,
+  type LensWeights,
+} from '../lens';
 
 /** Slices of the rod that the cavity gets; each is an exact graded-index duct, so few are enough. */
 const mostSlices = 12;
@@ -46,7 +56,12 @@ export interface RodLens {
  * The lens of a temperature field and of the bulge of its faces.
  * @param bulge dioptric power of the front and the back face, 1/m
  */
-export function rodLens(resolved: ResolvedDesign, prepared: PreparedLens, field: RodField, bulge: { front: number; back: number }): RodLens {
+export function rodLens(
+  resolved: ResolvedDesign,
+  prepared: PreparedLens,
+  field: RodField,
+  bulge: { front: number; back: number },
+): RodLens {
   const { rod } = resolved;
   const { geometry, weights, sliceStarts, sliceLengths } = prepared;
   const fit = fitLens(field, weights);
@@ -54,7 +69,8 @@ export function rodLens(resolved: ResolvedDesign, prepared: PreparedLens, field:
   const faces = bulge.front + bulge.back;
   const slices = new Float64Array(sliceLengths.length);
   for (let k = 0; k < slices.length; k++)
-    for (let j = sliceStarts[k]!; j < sliceStarts[k + 1]!; j++) slices[k] = slices[k]! + rod.thermoOptic * fit.slicePowers[j]!;
+    for (let j = sliceStarts[k]!; j < sliceStarts[k + 1]!; j++)
+      slices[k] = slices[k]! + rod.thermoOptic * fit.slicePowers[j]!;
   const both = { sagittal: slices, tangential: slices };
   const front = { sagittal: bulge.front, tangential: bulge.front };
   const back = { sagittal: bulge.back, tangential: bulge.back };
@@ -69,7 +85,14 @@ export function rodLens(resolved: ResolvedDesign, prepared: PreparedLens, field:
     thermoOptic,
     bulge: faces,
     aberrationLoss: aberrationLoss(weights, profile, fitProfile(weights, profile), rod.laser.wavelength),
-    optics: { refractiveIndex: rod.refractiveIndex, sliceLengths, slicePowers: both, frontPower: front, backPower: back },
-    estimate: (rod.thermoOptic + planeStressBulge(rod.refractiveIndex, rod.poissonRatio, rod.expansion)) * fit.power,
+    optics: {
+      refractiveIndex: rod.refractiveIndex,
+      sliceLengths,
+      slicePowers: both,
+      frontPower: front,
+      backPower: back,
+    },
+    estimate:
+      (rod.thermoOptic + planeStressBulge(rod.refractiveIndex, rod.poissonRatio, rod.expansion)) * fit.power,
   };
 }

@@ -13,9 +13,15 @@ export function sectionStressEstimate(rod: ResolvedRod, field: RodField): number
   let row = 0;
   while (row + 1 < grid.nz && grid.axialFaces[row + 1]! < peakPosition.z) row++;
   let mean = 0;
-  for (let i = 0; i < nr; i++) mean += temperatures[row * nRadial + i]! * (faceSquares[i + 1]! - faceSquares[i]!);
+  for (let i = 0; i < nr; i++)
+    mean += temperatures[row * nRadial + i]! * (faceSquares[i + 1]! - faceSquares[i]!);
   mean /= faceSquares[nr]!;
-  const constants = { youngsModulus: rod.youngModulus, poissonRatio: rod.poissonRatio, expansion: rod.expansionAcross, axialExpansion: rod.expansion };
+  const constants = {
+    youngsModulus: rod.youngModulus,
+    poissonRatio: rod.poissonRatio,
+    expansion: rod.expansionAcross,
+    axialExpansion: rod.expansion,
+  };
   // The barrel is hottest in this plane too, to within the spread of heat along the rod.
   return planeStrainSurfaceHoop(constants, mean, Math.min(mean, field.edgeTemperature));
 }

@@ -23,7 +23,8 @@ const sweepLevels = 60;
 /** Lens power within which zones are always sought, 1/m. */
 const leastReach = 40;
 
-export type Step = { kind: 'progress'; share: number; what: string } | { kind: 'answer'; answer: Answer; final: boolean };
+export type Step =
+  { kind: 'progress'; share: number; what: string } | { kind: 'answer'; answer: Answer; final: boolean };
 
 /** Everything the first answer rests on, kept for the band. */
 export interface Findings {
@@ -40,7 +41,10 @@ export interface Findings {
 }
 
 /** Zones and edge of one design with its chosen cooler. */
-export function edgeOf(prepared: PreparedDesign, bench: OptionBench): { zones: Findings['zones']; edge: CavityEdge } {
+export function edgeOf(
+  prepared: PreparedDesign,
+  bench: OptionBench,
+): { zones: Findings['zones']; edge: CavityEdge } {
   const { pump } = prepared.resolved;
   const top = bench.lasing(pump.searchTo);
   const reach = Math.max(leastReach, 1.3 * Math.abs(top.lens.power));
@@ -51,7 +55,12 @@ export function edgeOf(prepared: PreparedDesign, bench: OptionBench): { zones: F
 /** A design without pump power is answered a hair above none, where every share is still defined. */
 const askedPower = ({ pump }: ResolvedDesign) => Math.max(pump.power, 1e-6 * pump.searchTo);
 
-function optionReport(bench: OptionBench, result: CeilingResult, asked: number, band: BandResult | null): OptionReport {
+function optionReport(
+  bench: OptionBench,
+  result: CeilingResult,
+  asked: number,
+  band: BandResult | null,
+): OptionReport {
   const { lasing, margins } = bench.at(asked);
   const { cooler } = bench;
   const ends = band?.ceilings.get(cooler.id);
@@ -64,23 +73,44 @@ function optionReport(bench: OptionBench, result: CeilingResult, asked: number, 
     electricalPower: lasing.point.electricalPower,
     passes: margins.every((margin) => margin.holds),
     margins,
-    ceiling: { pumpPower: result.pumpPower, setBy: result.setBy, low: ends?.low ?? null, high: ends?.high ?? null, reachesRange: result.reachesRange },
+    ceiling: {
+      pumpPower: result.pumpPower,
+      setBy: result.setBy,
+      low: ends?.low ?? null,
+      high: ends?.high ?? null,
+      reachesRange: result.reachesRange,
+    },
     windows: result.windows.map(({ from, to }) => ({ fromPumpPower: from, toPumpPower: to })),
     limits: result.limits,
   };
 }
 
 function edgeReport({ edge, zones }: Findings, band: BandResult | null): Report['cavityEdge'] {
-  return { pumpPower: edge.pumpPower, plane: edge.plane, dioptricPower: edge.dioptricPower, low: band?.edge?.low ?? null, high: band?.edge?.high ?? null, zones };
+  return {
+    pumpPower: edge.pumpPower,
+    plane: edge.plane,
+    dioptricPower: edge.dioptricPower,
+    low: band?.edge?.low ?? null,
+    high: band?.edge?.high ?? null,
+    zones,
+  };
 }
 
 /** Marks the design's operating point where the loop has a second steady state. */
-function withStates(prepared: PreparedDesign, bench: OptionBench, report: Report['operating']): Report['operating'] {
+function withStates(
+  prepared: PreparedDesign,
+  bench: OptionBench,
+  report: Report['operating'],
+): Report['operating'] {
   if (report.state !== 'steady') return report;
   const bases = steadyBases(prepared, { pumpPower: report.pumpPower, cooler: bench.cooler, beam: 'lasing' });
   if (bases.length < 2) return report;
   const words = bases.map((base) => `${(base - 273.15).toFixed(1)} degC`).join(' and ');
-  return { ...report, state: 'two', reason: `steady states with the base at ${words}; which one the laser settles in depends on where it comes from` };
+  return {
+    ...report,
+    state: 'two',
+    reason: `steady states with the base at ${words}; which one the laser settles in depends on where it comes from`,
+  };
 }
 
 function assemble(findings: Findings, band: BandResult | null): Answer {
@@ -89,11 +119,26 @@ function assemble(findings: Findings, band: BandResult | null): Answer {
   const level = chosen.at(asked);
   const options = benches.map((bench, k) => optionReport(bench, ceilings[k]!, asked, band));
   const to = resolved.pump.searchTo;
-  const rungs = benches.map(({ cooler }, k) => ({ id: cooler.id, demand: cooler.demand, windows: ceilings[k]!.windows }));
-  const ladder = ladderOf(rungs, to).map(({ from, to: end, option }) => ({ fromPumpPower: from, toPumpPower: end, option }));
+  const rungs = benches.map(({ cooler }, k) => ({
+    id: cooler.id,
+    demand: cooler.demand,
+    windows: ceilings[k]!.windows,
+  }));
+  const ladder = ladderOf(rungs, to).map(({ from, to: end, option }) => ({
+    fromPumpPower: from,
+    toPumpPower: end,
+    option,
+  }));
   const cavityEdge = edgeReport(findings, band);
   const operating = withStates(prepared, chosen, level.lasing.point);
-  const parts = { options, chosenCooler: resolved.chosenCooler, cavityEdge, ladder, bandComplete: band !== null, pumpPower: resolved.pump.power };
+  const parts = {
+    options,
+    chosenCooler: resolved.chosenCooler,
+    cavityEdge,
+    ladder,
+    bandComplete: band !== null,
+    pumpPower: resolved.pump.power,
+  };
   const report: Report = {
     format: 'pump-ceiling/report',
     version: 1,
@@ -109,7 +154,10 @@ function assemble(findings: Findings, band: BandResult | null): Answer {
     usableWindow: edge.windows.map(({ from, to: end }) => ({ fromPumpPower: from, toPumpPower: end })),
     mounts: ranked(findings.mounts),
     levers: band?.levers ?? [],
-    contributors: { ceiling: band?.ceilings.get(resolved.chosenCooler)?.contributors ?? [], cavityEdge: band?.edge?.contributors ?? [] },
+    contributors: {
+      ceiling: band?.ceilings.get(resolved.chosenCooler)?.contributors ?? [],
+      cavityEdge: band?.edge?.contributors ?? [],
+    },
     sweep: findings.sweep,
     comparisons: comparisonsOf(prepared, level.lasing, cavityEdge),
     constants: resolved.constants,

@@ -10,7 +10,8 @@ function rodPicture(prepared: PreparedDesign, { field }: SolvedPoint): RodPictur
   const { grid, temperatures, peakPosition } = field;
   const { rod, pump } = prepared.resolved;
   const length = grid.axialFaces[grid.nz]!;
-  const along = (end: number) => Float64Array.from({ length: profilePoints }, (_, k) => (end * k) / (profilePoints - 1));
+  const along = (end: number) =>
+    Float64Array.from({ length: profilePoints }, (_, k) => (end * k) / (profilePoints - 1));
   const r = along(rod.radius);
   const z = along(length);
   const mountFaces = grid.nMount > 0 ? grid.mountFaces.subarray(1) : new Float64Array(0);
@@ -27,7 +28,11 @@ function rodPicture(prepared: PreparedDesign, { field }: SolvedPoint): RodPictur
     pumpRadius: pump.radius,
     frontCap: rod.frontCap,
     backCap: rod.backCap,
-    radialProfile: { r, temperature: r.map((at) => temperatureAt(field, at, peakPosition.z)), z: peakPosition.z },
+    radialProfile: {
+      r,
+      temperature: r.map((at) => temperatureAt(field, at, peakPosition.z)),
+      z: peakPosition.z,
+    },
     axialProfile: { z, temperature: z.map((at) => temperatureAt(field, 0, at)) },
   };
 }
@@ -44,7 +49,9 @@ function lengthOf(element: CavityElement, rod: number): number {
 function labelOf(element: CavityElement): string {
   switch (element.kind) {
     case 'mirror':
-      return Number.isFinite(element.radius) ? `mirror R ${(element.radius * 1e3).toPrecision(4).replace(/\.?0+$/, '')} mm` : 'flat mirror';
+      return Number.isFinite(element.radius)
+        ? `mirror R ${(element.radius * 1e3).toPrecision(4).replace(/\.?0+$/, '')} mm`
+        : 'flat mirror';
     case 'lens':
       return `lens f ${(element.focalLength * 1e3).toPrecision(4).replace(/\.?0+$/, '')} mm`;
     default:
@@ -59,12 +66,20 @@ function cavityPicture(prepared: PreparedDesign, solved: SolvedPoint): CavityPic
   const elements = prepared.resolved.cavity.elements.map((element, index) => {
     const from = at;
     at += lengthOf(element, rodLength(optics));
-    const radius = element.kind === 'mirror' && Number.isFinite(element.radius) ? { radius: element.radius } : {};
+    const radius =
+      element.kind === 'mirror' && Number.isFinite(element.radius) ? { radius: element.radius } : {};
     return { index, kind: element.kind, from, to: at, ...radius, label: labelOf(element) };
   });
   const envelope = (plane: 'sagittal' | 'tangential') =>
-    modeEnvelope(prepared.cavity, optics, plane, wavelength, 24).map(({ position, radius }) => ({ position, radius }));
-  return { elements, length: at, envelopes: { sagittal: envelope('sagittal'), tangential: envelope('tangential') } };
+    modeEnvelope(prepared.cavity, optics, plane, wavelength, 24).map(({ position, radius }) => ({
+      position,
+      radius,
+    }));
+  return {
+    elements,
+    length: at,
+    envelopes: { sagittal: envelope('sagittal'), tangential: envelope('tangential') },
+  };
 }
 
 /** What the page draws of one operating point, lasing and blocked. */

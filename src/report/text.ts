@@ -25,7 +25,14 @@ function shown(value: number, unit: string): string {
 export function table(rows: readonly (readonly string[])[]): string {
   const widths: number[] = [];
   for (const row of rows) row.forEach((cell, k) => (widths[k] = Math.max(widths[k] ?? 0, cell.length)));
-  return rows.map((row) => row.map((cell, k) => cell.padEnd(widths[k]!)).join('  ').trimEnd()).join('\n');
+  return rows
+    .map((row) =>
+      row
+        .map((cell, k) => cell.padEnd(widths[k]!))
+        .join('  ')
+        .trimEnd(),
+    )
+    .join('\n');
 }
 
 const band = (low: number | null, high: number | null) =>
@@ -68,8 +75,10 @@ function stateRows(report: Report): string[][] {
   both('peak tensile stress', (point) => `${number(point.stress.peakTensile / 1e6, 3)} MPa`);
   both('lens, mode-weighted', (point) => `${number(point.lens.dioptricPower, 4)} /m`);
   both('lens, on the axis', (point) => `${number(point.lens.axisDioptricPower, 4)} /m`);
-  both('stability m, sagittal / tangential', ({ cavity }) =>
-    `${number(cavity.sagittal.stability, 3)} / ${number(cavity.tangential.stability, 3)}`);
+  both(
+    'stability m, sagittal / tangential',
+    ({ cavity }) => `${number(cavity.sagittal.stability, 3)} / ${number(cavity.tangential.stability, 3)}`,
+  );
   return rows;
 }
 
@@ -78,13 +87,15 @@ function marginRows(report: Report): string[][] {
   if (!option) return [];
   return [
     [`limits with ${option.label}`, 'value', 'bound', 'margin', 'beam'],
-    ...option.margins.filter((margin) => margin.limit !== 'steady state' || !margin.holds).map((margin) => [
-      margin.limit,
-      shown(margin.value, margin.unit),
-      shown(margin.bound, margin.unit),
-      `${margin.holds ? '' : 'BROKEN '}${number(margin.share * 100, 3)} %`,
-      margin.beam,
-    ]),
+    ...option.margins
+      .filter((margin) => margin.limit !== 'steady state' || !margin.holds)
+      .map((margin) => [
+        margin.limit,
+        shown(margin.value, margin.unit),
+        shown(margin.bound, margin.unit),
+        `${margin.holds ? '' : 'BROKEN '}${number(margin.share * 100, 3)} %`,
+        margin.beam,
+      ]),
   ];
 }
 
@@ -104,8 +115,13 @@ function mountRows(report: Report): string[][] {
 
 function edgeText(report: Report): string {
   const edge = report.cavityEdge;
-  const windows = report.usableWindow.map((w) => `${number(w.fromPumpPower, 3)} to ${number(w.toPumpPower, 3)} W`);
-  const window = windows.length > 0 ? `Both planes stable over ${windows.join(' and ')} of pump power.` : 'No pump power in the searched range leaves both planes stable.';
+  const windows = report.usableWindow.map(
+    (w) => `${number(w.fromPumpPower, 3)} to ${number(w.toPumpPower, 3)} W`,
+  );
+  const window =
+    windows.length > 0
+      ? `Both planes stable over ${windows.join(' and ')} of pump power.`
+      : 'No pump power in the searched range leaves both planes stable.';
   if (edge.pumpPower === null) return `Cavity edge: not reached up to ${watts(report.searchedTo)}. ${window}`;
   const ends = edge.low === null ? '' : `, band ${band(edge.low, edge.high)}`;
   return `Cavity edge: ${watts(edge.pumpPower, 4)} (${edge.plane} plane, lens ${number(edge.dioptricPower, 4)} /m${ends}). ${window}`;
@@ -131,8 +147,16 @@ export function reportText(report: Report): string {
     table(mountRows(report)),
   ];
   if (report.contributors.ceiling.length > 0)
-    parts.push(table([['what widens the band most', 'at low', 'at high'], ...report.contributors.ceiling.slice(0, 6).map((item) => [item.label, `x ${number(item.atLow, 3)}`, `x ${number(item.atHigh, 3)}`])]));
-  if (report.warnings.length > 0) parts.push(['Warnings', ...report.warnings.map((item) => `- ${item.text}`)].join('\n'));
+    parts.push(
+      table([
+        ['what widens the band most', 'at low', 'at high'],
+        ...report.contributors.ceiling
+          .slice(0, 6)
+          .map((item) => [item.label, `x ${number(item.atLow, 3)}`, `x ${number(item.atHigh, 3)}`]),
+      ]),
+    );
+  if (report.warnings.length > 0)
+    parts.push(['Warnings', ...report.warnings.map((item) => `- ${item.text}`)].join('\n'));
   parts.push(['Cautions', ...report.cautions.map((text) => `- ${text}`)].join('\n'));
   return `${parts.join('\n\n')}\n`;
 }

@@ -20,13 +20,13 @@ export interface CeilingResult {
   limits: { limit: LimitName; pumpPower: number | null }[];
 }
 
-/** Levels of the first look along the pump-power axis, denser at low power. */
-const levels = 14;
+/** Levels of the first look in sixtieths of the searched range, denser at low power; a sweep over sixty levels meets them all. */
+const usualLevels = [1, 2, 4, 6, 9, 12, 16, 20, 25, 30, 36, 43, 51, 60];
 /** Crossings are found to this share of the searched range. */
 const precision = 2e-5;
 
-function scanPowers(to: number, extra: readonly number[]): number[] {
-  const even = Array.from({ length: levels }, (_, k) => to * ((k + 1) / levels) ** 1.4);
+function scanPowers(to: number, extra: readonly number[], levels: readonly number[]): number[] {
+  const even = levels.map((level) => (to * level) / 60);
   const near = extra.flatMap((power) => [power * 0.997, power * 1.003]);
   const all = [to * 1e-3, ...even, ...near].filter((power) => power > 0 && power <= to * (1 + 1e-12));
   return all.sort((a, b) => a - b).filter((power, k, list) => k === 0 || power > list[k - 1]! * (1 + 1e-9));
@@ -92,10 +92,16 @@ function blockerOf(names: LimitName[], seen: Margin[][]): LimitName | null {
  * @param at margins at a pump power, W
  * @param to end of the searched range, W
  * @param extra powers near which a limit may be broken only briefly (cavity zones), W
+ * @param levels of the first look, in sixtieths of the range
  * @returns ceiling, the limit that sets it, all intervals, and where each limit is first broken
  */
-export function ceilingOf(at: MarginsAt, to: number, extra: readonly number[] = []): CeilingResult {
-  const powers = scanPowers(to, extra);
+export function ceilingOf(
+  at: MarginsAt,
+  to: number,
+  extra: readonly number[] = [],
+  levels: readonly number[] = usualLevels,
+): CeilingResult {
+  const powers = scanPowers(to, extra, levels);
   const seen = powers.map(at);
   const names = [...new Set(seen.flatMap((margins) => margins.map((margin) => margin.limit)))];
   const crossings = names

@@ -1,7 +1,7 @@
 import { findMountMaterial, type MountMaterial } from '../materials';
 import type { ResolvedDesign } from '../design/resolved';
 import type { LimitName } from '../limits/types';
-import { prepareDesign } from '../operating/prepare';
+import { prepareDesign, type PreparedDesign } from '../operating/prepare';
 import { OptionBench } from './option-bench';
 
 /** Mounts that a workshop can get, from the best conductor to the worst. */
@@ -15,6 +15,9 @@ export const comparedMounts = [
   'brass',
   'stainless steel 304',
 ] as const;
+
+/** Powers looked at for each mount; the limits are those of the design itself, only moved a little. */
+const mountLevels = [4, 10, 18, 28, 40, 60];
 
 export interface MountComparison {
   material: string;
@@ -51,16 +54,17 @@ function compare(
   resolved: ResolvedDesign,
   current: boolean,
   edges: readonly number[],
+  like: PreparedDesign,
   known?: OptionBench,
 ): MountComparison {
   const { mount, rod, pump } = resolved;
   const bench =
     known ??
     new OptionBench(
-      prepareDesign(resolved),
+      prepareDesign(resolved, 'standard', like),
       resolved.coolers.find((item) => item.id === resolved.chosenCooler)!,
     );
-  const { pumpPower, setBy } = bench.ceiling(edges);
+  const { pumpPower, setBy } = bench.ceiling(edges, known ? undefined : mountLevels);
   const { point } = bench.lasing(Math.max(pump.power, 1e-6 * pump.searchTo));
   const length = rod.frontCap + rod.dopedLength + rod.backCap;
   return {
@@ -84,11 +88,11 @@ function compare(
  */
 export function* compareMounts(bench: OptionBench, edges: readonly number[]): Generator<MountComparison> {
   const { resolved } = bench.prepared;
-  yield compare(resolved, true, edges, bench);
+  yield compare(resolved, true, edges, bench.prepared, bench);
   for (const name of comparedMounts) {
     const material = findMountMaterial(name)!;
     if (material.name === resolved.mount.name) continue;
-    yield compare(withMount(resolved, material), false, edges);
+    yield compare(withMount(resolved, material), false, edges, bench.prepared);
   }
 }
 

@@ -58,8 +58,11 @@ export class OptionBench {
     return level;
   }
 
-  /** @param edges powers near which the cavity gains or loses stability, W */
-  ceiling(edges: readonly number[] = []): CeilingResult {
-    return ceilingOf((power) => this.at(power).margins, this.prepared.resolved.pump.searchTo, edges);
+  /**
+   * @param edges powers near which the cavity gains or loses stability, W
+   * @param levels of the first look, in sixtieths of the searched range
+   */
+  ceiling(edges: readonly number[] = [], levels?: readonly number[]): CeilingResult {
+    return ceilingOf((power) => this.at(power).margins, this.prepared.resolved.pump.searchTo, edges, levels);
   }
 }
