@@ -79,15 +79,19 @@ export function linkConductance(links: Links, index: number, slope: number): num
   return 1 / (links.inner[index]! + links.outer[index]! / slope);
 }
 
-/** Fills the band and factors it, with the links linearised at the given surface slopes. */
+/**
+ * Fills the band and factors it, with the links linearised at the given surface slopes.
+ * @param storage what a time step adds to the diagonal, W/K, length nRadial*nz; left out for the steady state
+ */
 export function factorWith(
   model: RodHeatModel,
   grid: RodGrid,
   links: LinkSet,
   slopes: SurfaceSlopes,
+  storage: Float64Array = new Float64Array(grid.nRadial * grid.nz),
 ): BandedFactor {
   const { nr, nz, nRadial, nMount } = grid;
-  const diagonal = new Float64Array(nRadial * nz);
+  const diagonal = Float64Array.from(storage);
   const lower = new Float64Array(nRadial * nz * nRadial);
   const join = (p: number, q: number, conductance: number) => {
     diagonal[p] = diagonal[p]! + conductance;

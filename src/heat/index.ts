@@ -7,3 +7,4 @@ export type { BoundaryTemperatures, ContactModel, EndModel, RodHeatModel, SideMo
 export { meanWithin, temperatureAt } from './read-field';
 export { solveRod } from './solve';
 export { heatSource } from './source';
+export { type HeatCapacity, type WarmUp, advance, startWarmUp } from './warm-up';

@@ -33,15 +33,24 @@ function solveLinear(
   heatPerCell: Float64Array,
   boundary: BoundaryTemperatures,
 ): Float64Array {
+  return solveBanded(conduction.factor, drive(conduction, heatPerCell, boundary));
+}
+
+/** Right-hand side for the rise above the base: heat, and what the air at the ends brings in, W, length nRadial*nz. */
+export function drive(
+  conduction: RodConduction,
+  heatPerCell: Float64Array,
+  boundary: BoundaryTemperatures,
+): Float64Array {
   const { grid, front, back } = conduction;
   const { nr, nz, nRadial } = grid;
-  const rise = Float64Array.from(heatPerCell);
+  const right = Float64Array.from(heatPerCell);
   const frontRise = boundary.front - boundary.side;
   const backRise = boundary.back - boundary.side;
   const last = (nz - 1) * nRadial;
   for (let i = 0; i < nr; i++) {
-    rise[i] = rise[i]! + frontRise / (front.inner[i]! + front.outer[i]!);
-    rise[last + i] = rise[last + i]! + backRise / (back.inner[i]! + back.outer[i]!);
+    right[i] = right[i]! + frontRise / (front.inner[i]! + front.outer[i]!);
+    right[last + i] = right[last + i]! + backRise / (back.inner[i]! + back.outer[i]!);
   }
-  return solveBanded(conduction.factor, rise);
+  return right;
 }

@@ -33,6 +33,8 @@ const inputs = v.object({
     k_Tref_K: v.optional(temperature, 300),
     dn_dT_1_K: v.pipe(v.number(), v.finite()),
     n: v.pipe(v.number(), v.minValue(1), v.maxValue(10)),
+    rho_kg_m3: v.optional(positive),
+    cp_J_kgK: v.optional(positive),
   }),
   pump: v.object({
     P0_W: notNegative,
@@ -47,6 +49,23 @@ const inputs = v.object({
   }),
   boundary: v.object({ side: v.variant('type', [fixed, conductance, holder]), front: end, back: end }),
   lens: v.object({ w_m_m: positive }),
+  elastic: v.optional(
+    v.object({
+      E_Pa: positive,
+      nu: v.pipe(v.number(), v.minValue(0), v.maxValue(0.49)),
+      alpha_T_1_K: v.pipe(v.number(), v.finite()),
+      T_ref_K: temperature,
+    }),
+  ),
+  time: v.optional(
+    v.object({
+      mode: v.picklist(['step', 'square']),
+      T_initial_K: temperature,
+      output_times_s: v.pipe(v.array(positive), v.minLength(1)),
+      period_s: v.optional(positive),
+      duty: v.optional(v.pipe(v.number(), v.gtValue(0), v.ltValue(1))),
+    }),
+  ),
   outputs: v.optional(
     v.object({
       sample_points_m: v.optional(v.array(v.tuple([notNegative, notNegative])), []),
@@ -97,5 +116,18 @@ function consistent(problem: ReferenceInputs): ReferenceReading {
     return refuse(`outputs.sample_points_m: the point (${outside.join(', ')}) m lies outside the rod.`);
   const wide = outputs.I_radii_m.find((r) => r > geometry.a_m);
   if (wide !== undefined) return refuse(`outputs.I_radii_m: ${wide} m lies outside the rod.`);
+  return consistentTime(problem);
+}
+
+function consistentTime(problem: ReferenceInputs): ReferenceReading {
+  const { time, material, boundary } = problem;
+  if (time === undefined) return { ok: true, inputs: problem };
+  if (material.rho_kg_m3 === undefined || material.cp_J_kgK === undefined)
+    return refuse('material: a problem in time needs rho_kg_m3 and cp_J_kgK.');
+  if (material.k_exponent !== 0)
+    return refuse('material.k_exponent: a problem in time needs a constant conductivity, 0.');
+  if (boundary.side.type === 'holder') return refuse('boundary.side: a problem in time takes no holder.');
+  if (time.mode === 'square' && (time.period_s === undefined || time.duty === undefined))
+    return refuse('time: a square wave needs period_s and duty.');
   return { ok: true, inputs: problem };
 }

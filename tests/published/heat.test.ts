@@ -1,7 +1,16 @@
 import { describe, expect, it } from 'vitest';
-import { meanWithin, temperatureAt } from '../../src/heat';
+import {
+  advance,
+  assembleRod,
+  heatSource,
+  makeRodGrid,
+  meanWithin,
+  solveRod,
+  startWarmUp,
+  temperatureAt,
+} from '../../src/heat';
 import { besselJ0, besselJ1, besselZero, expIntegralEin } from '../../src/numerics/special';
-import type { BeamProfile } from '../../src/pump';
+import { type BeamProfile, ringShares } from '../../src/pump';
 import { evenlyPumpedRod, plainRod, pumpedRod } from '../heat/rod';
 
 const base = 273.15;
@@ -195,5 +204,57 @@ describe('what does not depend on the absorption', () => {
     expect(off(out, field.generated)).toBeLessThan(1e-9);
     const truncated = 5 * (1 - Math.exp(-3)) * (1 - Math.exp(-2 * 1.5 ** 2));
     expect(off(field.generated, truncated)).toBeLessThan(1e-12);
+  });
+});
+
+describe('in time', () => {
+  const [capacity, k, a] = [2.5e6, 10, plainRod.radius];
+  const timeOf = (fourier: number) => (fourier * a * a * capacity) / k;
+
+  /** A long rod heated all over, or not at all. */
+  function uniformRod(side: typeof plainRod.side, heatPower: number) {
+    const model = { ...plainRod, side };
+    const grid = makeRodGrid(model, { pumpRadius: a, absorptionCoefficient: 0, cells: { nr: 40, nz: 6 } });
+    const shares = ringShares(flatTop, grid.radialFaces, a);
+    const even = grid.axialCentres.map(
+      (_, j) => (grid.axialFaces[j + 1]! - grid.axialFaces[j]!) / plainRod.dopedLength,
+    );
+    return { conduction: assembleRod(model, grid), heat: heatSource(grid, shares, even, heatPower) };
+  }
+  const outside = { side: base, front: base, back: base };
+
+  // 1 - 8 sum exp(-b2 Fo)/(b3 J1(b)) (Carslaw & Jaeger, from memory).
+  it('switch-on, uniform heating, edge held: the axis has 0.199617, 0.385190, 0.651796, 0.890377 of its rise at Fo = 0.05, 0.1, 0.2, 0.4', () => {
+    const { conduction, heat } = uniformRod({ kind: 'fixed' }, 10);
+    const steady = solveRod(conduction, heat, outside).peakTemperature - base;
+    const warmUp = startWarmUp(conduction, { rod: capacity }, outside, base);
+    for (const [fourier, share] of [
+      [0.05, 0.199617],
+      [0.1, 0.38519],
+      [0.2, 0.651796],
+      [0.4, 0.890377],
+    ] as const) {
+      const field = advance(warmUp, heat, timeOf(fourier) - warmUp.time);
+      expect(off((field.peakTemperature - base) / steady, share)).toBeLessThan(1e-3);
+    }
+  });
+
+  // Slowest mode exp(-zeta2 Fo) with amplitude C on the axis, zeta J1 = Bi J0 (Incropera Table 5.1, from memory).
+  it.each([
+    [0.1, 0.441682, 1.024579],
+    [1, 1.255784, 1.207092],
+    [10, 2.179497, 1.567692],
+    [100, 2.380902, 1.601524],
+  ])('cooling at Bi = %d: the axis falls as C exp(-zeta2 Fo), zeta = %d, C = %d', (biot, zeta, amplitude) => {
+    expect(off((zeta * besselJ1(zeta)) / besselJ0(zeta), biot)).toBeLessThan(1e-4);
+    const { conduction, heat } = uniformRod({ kind: 'contact', conductance: (biot * k) / a }, 0);
+    const warmUp = startWarmUp(conduction, { rod: capacity }, outside, base + 100);
+    // By then the next mode is gone.
+    for (const fourier of [0.6, 1]) {
+      const field = advance(warmUp, heat, timeOf(fourier) - warmUp.time);
+      const expected = amplitude * Math.exp(-zeta * zeta * fourier);
+      // 0.05 % of the initial excess.
+      expect(Math.abs((field.peakTemperature - base) / 100 - expected)).toBeLessThan(5e-4);
+    }
   });
 });
