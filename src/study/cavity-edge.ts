@@ -36,15 +36,22 @@ function powersOfLens(lens: number, powers: readonly number[], at: PointAt, to: 
   return found;
 }
 
+/** Shares of an edge's power within which the round trip itself is searched for it, one after the other. */
+const reaches = [0.02, 0.05, 0.12];
+
 /**
- * Sharpens an edge on the round trip itself, since along the pump-power axis the lens also changes its shape a little.
- * Where two zones touch, |m| does not change sides and the lens's own power stands.
+ * Sharpens an edge on the round trip itself, since along the pump-power axis the lens also changes its shape a little,
+ * most where the diode drifts. Where two zones touch, |m| does not change sides and the lens's own power stands.
  */
 function sharpen(power: number, plane: Plane, at: PointAt, to: number): number {
   const inside = (p: number) => room(at(p), plane);
-  const a = power * 0.98;
-  const b = Math.min(power * 1.02, to);
-  return inside(a) * inside(b) < 0 ? findRoot(inside, a, b, { tolerance: precision * to }) : power;
+  for (const reach of reaches) {
+    const a = power * (1 - reach);
+    const b = Math.min(power * (1 + reach), to);
+    const [fa, fb] = [inside(a), inside(b)];
+    if (fa * fb < 0) return findRoot(inside, a, b, { tolerance: precision * to, fa, fb });
+  }
+  return power;
 }
 
 function windowsBetween(marks: readonly number[], at: PointAt, to: number): Interval[] {

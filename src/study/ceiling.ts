@@ -1,5 +1,6 @@
 import { findRoot } from '../numerics/root';
 import type { LimitName, Margin } from '../limits/types';
+import { hiddenTurns } from './hidden-turns';
 
 /** Margins of every limit at one pump power, for one way of cooling. */
 export type MarginsAt = (pumpPower: number) => Margin[];
@@ -58,6 +59,20 @@ function crossingsOf(limit: LimitName, powers: number[], at: MarginsAt, seen: Ma
   return found;
 }
 
+/** The powers of the first look, and those where a limit turns through zero and back between two of them. */
+function withTurns(powers: number[], at: MarginsAt): number[] {
+  const seen = powers.map(at);
+  const names = new Set(seen.flatMap((margins) => margins.map((margin) => margin.limit)));
+  const turns = [...names].flatMap((limit) =>
+    hiddenTurns(
+      (power) => shareOf(at(power), limit),
+      powers,
+      seen.map((margins) => shareOf(margins, limit)),
+    ),
+  );
+  return [...new Set([...powers, ...turns])].sort((a, b) => a - b);
+}
+
 function windowsOf(names: LimitName[], first: Margin[], crossings: Crossing[], to: number) {
   const broken = new Set(names.filter((limit) => shareOf(first, limit) < 0));
   const windows: (Interval & { setBy: LimitName | null })[] = [];
@@ -101,7 +116,7 @@ export function ceilingOf(
   extra: readonly number[] = [],
   levels: readonly number[] = usualLevels,
 ): CeilingResult {
-  const powers = scanPowers(to, extra, levels);
+  const powers = withTurns(scanPowers(to, extra, levels), at);
   const seen = powers.map(at);
   const names = [...new Set(seen.flatMap((margins) => margins.map((margin) => margin.limit)))];
   const crossings = names

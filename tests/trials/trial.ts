@@ -28,7 +28,10 @@ export const trial = (name: string, changes: Changes = {}): Design =>
 export function benchOf(design: Design, coolerId?: string, cells?: GridWish['cells']): OptionBench {
   const resolved = resolve(design);
   const id = coolerId ?? resolved.chosenCooler;
-  return new OptionBench(prepareDesign(resolved, cells), resolved.coolers.find((cooler) => cooler.id === id)!);
+  return new OptionBench(
+    prepareDesign(resolved, cells),
+    resolved.coolers.find((cooler) => cooler.id === id)!,
+  );
 }
 
 /** Lasing and blocked point at the design's own pump power. */
