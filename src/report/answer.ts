@@ -12,6 +12,7 @@ import { sweepOf } from '../study/sweep';
 import type { SweepPoint } from '../study/types';
 import { zonesOf } from '../study/zones';
 import { bandSteps, type BandResult } from './answer-band';
+import { binAdvice } from './bin-advice';
 import { cautionsOf } from './cautions';
 import { comparisonsOf } from './comparisons';
 import { picturesOf } from './pictures';
@@ -138,6 +139,7 @@ function assemble(findings: Findings, band: BandResult | null): Answer {
     ladder,
     bandComplete: band !== null,
     pumpPower: resolved.pump.power,
+    bin: binAdvice(resolved, options, prepared.caseWindow.best),
   };
   const report: Report = {
     format: 'pump-ceiling/report',

@@ -1,21 +1,77 @@
+import { planeMode, type RodOptics } from '../cavity';
 import type { Warning } from '../errors';
 import { peakExcitedShare } from '../laser';
 import type { SolvedPoint } from '../operating/point';
 import type { PreparedDesign } from '../operating/prepare';
-import { absorptionWarnings, beamRadii, clippingWarnings } from '../pump';
+import { absorbedShare, absorptionWarnings, beamRadii, clippingWarnings, pumpChannels } from '../pump';
 
 /** More than this share of the ions excited bleaches the absorption that the model takes as unchanged. */
 const mostExcited = 0.1;
 const perMetre = (power: number) => `${Number(power.toPrecision(3))} /m`;
 
+/** The rod's optics with its lens scaled to another power and sign, its shape along the rod kept. */
+function scaledOptics(optics: RodOptics, factor: number): RodOptics {
+  const scale = (values: Float64Array) => values.map((value) => value * factor);
+  return {
+    ...optics,
+    slicePowers: {
+      sagittal: scale(optics.slicePowers.sagittal),
+      tangential: scale(optics.slicePowers.tangential),
+    },
+    frontPower: {
+      sagittal: optics.frontPower.sagittal * factor,
+      tangential: optics.frontPower.tangential * factor,
+    },
+    backPower: {
+      sagittal: optics.backPower.sagittal * factor,
+      tangential: optics.backPower.tangential * factor,
+    },
+  };
+}
+
 /** The net lens can come out either way: the bulk's dn/dT and the bulge of the faces pull apart. */
-function signWarning({ lens }: SolvedPoint): Warning[] {
+function signWarning({ cavity, resolved }: PreparedDesign, { lens }: SolvedPoint): Warning[] {
   const ends = [lens.thermoOptic, lens.power, lens.estimate];
   if (Math.max(...ends) <= 0 || Math.min(...ends) >= 0) return [];
+  const described = (power: number) => {
+    if (lens.power === 0) return perMetre(power);
+    const optics = scaledOptics(lens.optics, power / lens.power);
+    const planes = (['sagittal', 'tangential'] as const).map((plane) =>
+      planeMode(cavity, optics, plane, resolved.rod.laser.wavelength),
+    );
+    return `${perMetre(power)} (cavity ${planes.every((plane) => plane.stable) ? 'stable' : 'not stable'})`;
+  };
   return [
     {
       where: 'lens',
-      text: `The sign of the lens is not settled: dn/dT alone gives ${perMetre(lens.thermoOptic)}, with the bulge from the elastic solution ${perMetre(lens.power)}, with the bulge of freely expanding discs ${perMetre(lens.estimate)}. Check the cavity for a lens of either sign.`,
+      text: `The sign of the lens is not settled: dn/dT alone gives ${described(lens.thermoOptic)}, with the bulge from the elastic solution ${described(lens.power)}, with the bulge of freely expanding discs ${described(lens.estimate)}. Build a cavity that bears a lens of either sign, or measure it.`,
+    },
+  ];
+}
+
+/** Absorbed shares of the two polarisations that differ by less than this need no remark. */
+const alikeShares = 0.05;
+
+/** What each polarisation of the pump finds in a crystal that absorbs them differently. */
+function polarisationRemark({ resolved }: PreparedDesign, { point }: SolvedPoint): Warning[] {
+  const { pump, rod } = resolved;
+  const { pi, sigma } = pump.polarisationShares;
+  if (rod.isotropic || rod.absorption.kind === 'coefficient' || !(pi > 0 && sigma > 0)) return [];
+  const taken = (shares: { pi: number; sigma: number }) =>
+    absorbedShare(
+      pumpChannels({ centre: point.diode.wavelength, linewidth: pump.linewidth }, shares, rod.absorption),
+      rod.dopedLength,
+      pump.passes,
+      pump.returnReflectivity,
+    );
+  const along = taken({ pi: 1, sigma: 0 });
+  const across = taken({ pi: 0, sigma: 1 });
+  if (Math.abs(along - across) < alikeShares) return [];
+  const percent = (share: number) => `${(100 * share).toFixed(0)} %`;
+  return [
+    {
+      where: 'pump.polarisation',
+      text: `The crystal absorbs ${percent(along)} of the pump light polarised along its optic axis (pi) and ${percent(across)} of that across it (sigma): turn pump or crystal towards the stronger.`,
     },
   ];
 }
@@ -61,7 +117,8 @@ export function pointWarnings(prepared: PreparedDesign, lasing: SolvedPoint): Wa
     ...absorptionWarnings({ centre: point.diode.wavelength, linewidth: pump.linewidth }, rod.absorption),
     ...clippingWarnings(pump.profile, Math.max(...beamRadii(grid.axialFaces, beam)), rod.radius),
     ...bleachingWarning(prepared, lasing),
-    ...signWarning(lasing),
+    ...signWarning(prepared, lasing),
+    ...polarisationRemark(prepared, lasing),
     ...cooler.warnings,
   ];
   if (ratio !== null && ratio < 0.7)

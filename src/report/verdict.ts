@@ -1,3 +1,4 @@
+import { binSentence, type BinAdvice } from './bin-advice';
 import type { OptionReport, Report } from './types';
 
 const watts = (value: number) => `${Number(value.toPrecision(3))} W`;
@@ -60,11 +61,14 @@ function remedy({ options, ladder, pumpPower, chosenCooler }: Parts): string {
 }
 
 /**
- * The answer in two or three sentences: the ceiling with the chosen cooler, its band and limit; whether the design's
- * pump power holds; and which cooling is the least that does.
+ * The answer in a few sentences: the ceiling with the chosen cooler, its band and limit; whether the design's
+ * pump power holds; which cooling is the least that does; and whether another
+ * bin of the diode would serve better.
  */
 export function verdictOf(parts: Parts): Report['verdict'] {
   const option = parts.options.find((item) => item.id === parts.chosenCooler)!;
-  const text = [ceilingWords(option), standing(option, parts.pumpPower), remedy(parts)].join(' ');
+  const words = [ceilingWords(option), standing(option, parts.pumpPower), remedy(parts)];
+  if (parts.bin) words.push(binSentence(parts.bin));
+  const text = words.join(' ');
   return { text, holds: option.passes };
 }
