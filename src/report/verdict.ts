@@ -5,11 +5,13 @@ const watts = (value: number) => `${Number(value.toPrecision(3))} W`;
 
 type Parts = Pick<Report, 'options' | 'chosenCooler' | 'cavityEdge' | 'ladder' | 'bandComplete'> & {
   pumpPower: number;
+  /** Another bin of the diode, where that would do away with a TEC. */
+  bin: BinAdvice | null;
 };
 
 function ceilingWords({ ceiling, label, windows }: OptionReport): string {
   if (ceiling.pumpPower === null)
-    return `With ${label} no pump power keeps every limit: ${ceiling.setBy ?? 'a limit'} is broken throughout.`;
+    return `With ${label} no pump power keeps every limit; broken over most of the range is the ${ceiling.setBy ?? 'steady state'}.`;
   const band =
     ceiling.low !== null && ceiling.high !== null
       ? ` (${watts(ceiling.low)} to ${watts(ceiling.high)} with the constants found in print)`
