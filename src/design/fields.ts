@@ -1,6 +1,6 @@
-import * as v from 'valibot';
-import { describeRange, type FieldNote } from './quantity-field';
+import { describeRange, type FieldNote } from './field-note';
 import { designSchema, type Design } from './schema';
+import { defaultOf, isGroup, isList, itemAt, noteOf, settled, under, type AnySchema } from './schema-walk';
 
 /** One thing a person can enter, as a screen or a table needs it. */
 export interface Field {
@@ -8,117 +8,116 @@ export interface Field {
   path: string;
   kind: 'quantity' | 'number' | 'choice' | 'text';
   note: FieldNote;
-  /** As it stands in the design; undefined where it is left to a catalogue or a rule. */
+  /** As it stands in the design; undefined where it is left empty. */
   value: string | number | undefined;
+  /** Whether it may be left empty. */
   optional: boolean;
+  /** What stands for it where it is left empty; without one `note.empty` says what holds. */
+  default?: string | number;
   /** Allowed range in words, for a hint. */
   allowed?: string;
 }
 
-type AnySchema = v.GenericSchema & {
-  wrapped?: AnySchema;
-  entries?: Record<string, AnySchema>;
-  items?: AnySchema[];
-  item?: AnySchema;
-  options?: AnySchema[];
-  pipe?: { kind: string; type: string; metadata?: { note?: FieldNote } }[];
-};
-
-function noteOf(schema: AnySchema): FieldNote | undefined {
-  return schema.pipe?.find((step) => step.type === 'metadata')?.metadata?.note;
-}
-
-/** The schema under wrappers, and for a variant or union the option that fits the value. */
-function settle(schema: AnySchema, value: unknown): AnySchema {
-  if (schema.wrapped) return settle(schema.wrapped, value);
-  if (schema.type === 'variant' || schema.type === 'union') {
-    const options = schema.options!;
-    return settle(options.find((option) => v.is(option, value)) ?? nearestOption(options, value), value);
-  }
-  return schema;
-}
-
-function nearestOption(options: AnySchema[], value: unknown): AnySchema {
-  const kind = (value as { kind?: unknown } | null)?.kind;
-  const sameKind = options.find(
-    (option) => option.entries?.kind && v.is(option.entries.kind, kind) && kind !== undefined,
-  );
-  if (sameKind) return sameKind;
-  return options.find((option) => (typeof value === 'object') === (option.entries !== undefined)) ?? options[0]!;
-}
-
-const kindOf = (note: FieldNote, value: unknown, schema: AnySchema): Field['kind'] => {
+function kindOf(note: FieldNote): Field['kind'] {
   if (note.choices) return 'choice';
-  if (schema.type === 'custom' && note.dimension && !note.words && typeof value === 'number') return 'number';
-  if (note.dimension === 'dimensionless' && note.range && typeof value === 'number') return 'number';
-  return note.dimension ? 'quantity' : 'text';
-};
+  if (!note.dimension) return 'text';
+  // A share is text with its "%"; a number that is no share has no unit at all.
+  return note.dimension === 'dimensionless' && note.unit === undefined ? 'number' : 'quantity';
+}
 
-function walk(schema: AnySchema, value: unknown, path: string, optional: boolean, out: Field[]): void {
-  const isOptional = optional || schema.type === 'optional';
-  const inner = settle(schema, value);
+/** Ranges in words, made once: they are the same for every design, and a page asks at every key stroke. */
+const rangesInWords = new WeakMap<FieldNote, string>();
+
+function allowedBy(note: FieldNote): string | undefined {
+  if (!note.dimension || !note.range) return undefined;
+  const known = rangesInWords.get(note) ?? describeRange(note.range, note.dimension, note.unit);
+  rangesInWords.set(note, known);
+  return known;
+}
+
+const isEntry = (value: unknown): value is string | number =>
+  typeof value === 'string' || typeof value === 'number';
+
+function fieldOf(
+  schema: AnySchema,
+  inner: AnySchema,
+  value: unknown,
+  path: string,
+  optional: boolean,
+): Field[] {
   const note = noteOf(inner);
-  if (inner.entries) {
-    for (const [key, entry] of Object.entries(inner.entries)) {
-      const below = (value as Record<string, unknown> | undefined)?.[key];
-      const alternative = path.startsWith('cavity.elements.') && path.split('.').length === 3;
-      if (alternative && below === undefined) continue;
-      walk(entry, below, path ? `${path}.${key}` : key, false, out);
-    }
-    return;
-  }
-  if (inner.type === 'array') {
-    (value as unknown[] | undefined)?.forEach((item, place) =>
-      walk(inner.item!, item, `${path}.${place}`, false, out),
+  if (!note || (value !== undefined && !isEntry(value))) return [];
+  const usual = defaultOf(schema);
+  return [
+    {
+      path,
+      kind: kindOf(note),
+      note,
+      value,
+      optional,
+      ...(isEntry(usual) ? { default: usual } : {}),
+      allowed: allowedBy(note),
+    },
+  ];
+}
+
+/** An element of the cavity is one of several things; those it is not are no fields of it. */
+const isElement = (path: string) => /^cavity\.elements\.\d+$/.test(path);
+
+function walk(schema: AnySchema, value: unknown, path: string, mayLack: boolean): Field[] {
+  const optional = mayLack || schema.type === 'optional';
+  const inner = settled(schema, value);
+  if (!inner) return [];
+  const at = (key: string | number) => (path === '' ? String(key) : `${path}.${key}`);
+  if (inner.entries)
+    return Object.entries(inner.entries).flatMap(([key, entry]) => {
+      const below = under(value, key);
+      return isElement(path) && below === undefined ? [] : walk(entry, below, at(key), false);
+    });
+  if (inner.type === 'array')
+    return Array.isArray(value)
+      ? value.flatMap((item, place) => walk(inner.item!, item, at(place), false))
+      : [];
+  if (isList(inner))
+    return inner.items!.flatMap((_, place) =>
+      walk(itemAt(inner, place)!, under(value, place), at(place), optional),
     );
-    return;
-  }
-  if (inner.items) {
-    inner.items.forEach((item, place) =>
-      walk(item, (value as unknown[] | undefined)?.[place], `${path}.${place}`, isOptional, out),
-    );
-    return;
-  }
-  if (!note || inner.type === 'literal') return;
-  if (value !== undefined && typeof value !== 'string' && typeof value !== 'number') return;
-  out.push({
-    path,
-    kind: kindOf(note, value, inner),
-    note,
-    value,
-    optional: isOptional,
-    allowed: note.dimension && note.range ? describeRange(note.range, note.dimension, note.unit) : undefined,
-  });
+  return fieldOf(schema, inner, value, path, optional);
 }
 
 /**
- * Every field of a design in the order of the file, with label, hint and allowed range.
+ * Every field of a design in the order of the file, with label, hint and allowed range: those left empty too. Places
+ * where one of several shapes is chosen are in `alternativesOf`.
  * @param design a checked design, or one still being typed
  */
 export function fieldsOf(design: Design): Field[] {
-  const out: Field[] = [];
-  walk(designSchema as unknown as AnySchema, design, '', false, out);
-  return out;
+  return walk(designSchema as unknown as AnySchema, design, '', false);
 }
 
 /** Value at a dotted path of a design, or undefined. */
 export function valueAt(design: unknown, path: string): unknown {
-  return path.split('.').reduce<unknown>((at, key) => (at as Record<string, unknown> | undefined)?.[key], design);
+  return path.split('.').reduce<unknown>(under, design);
+}
+
+/** A list none of whose places holds anything is as good as none. */
+const isHollow = (value: unknown) =>
+  Array.isArray(value) && value.length > 0 && value.every((item) => item === undefined);
+
+function placed(at: unknown, [key, ...further]: readonly string[], value: unknown): unknown {
+  if (key === undefined) return value;
+  const next = placed(under(at, key), further, value);
+  if (Array.isArray(at) || (at === undefined && /^\d+$/.test(key))) {
+    const list = [...((at as unknown[] | undefined) ?? [])];
+    list[Number(key)] = next;
+    return list;
+  }
+  const kept = isGroup(at) ? Object.entries(at) : [];
+  if (next === undefined || isHollow(next))
+    return Object.fromEntries(kept.filter(([other]) => other !== key));
+  return { ...Object.fromEntries(kept), [key]: next };
 }
 
 /** A copy of a design with one value replaced (or removed, where `value` is undefined); the original is kept. */
 export function withValue<T>(design: T, path: string, value: unknown): T {
-  const keys = path.split('.');
-  const place = (at: unknown, depth: number): unknown => {
-    const key = keys[depth]!;
-    const copy: Record<string, unknown> | unknown[] = Array.isArray(at)
-      ? [...(at as unknown[])]
-      : { ...(at as Record<string, unknown> | undefined) };
-    const slot = copy as Record<string, unknown>;
-    if (depth < keys.length - 1) slot[key] = place(slot[key], depth + 1);
-    else if (value === undefined && !Array.isArray(copy)) Reflect.deleteProperty(slot, key);
-    else slot[key] = value;
-    return copy;
-  };
-  return place(design, 0) as T;
+  return placed(design, path.split('.'), value) as T;
 }

@@ -1,37 +1,71 @@
 import { toJsonSchema } from '@valibot/to-json-schema';
-import { describeRange, type FieldNote } from './quantity-field';
+import { describeRange, exampleOf, type FieldNote } from './field-note';
 import { designSchema } from './schema';
+import { alternativesNoteOf, noteOf, type AnySchema } from './schema-walk';
 
-interface Note {
-  note?: FieldNote;
+/** Meaning, allowed range, words and what holds where nothing is given, in a row. */
+function descriptionOf(note: FieldNote): string {
+  const { dimension, range, unit, words, empty } = note;
+  const allowed = dimension && range ? `Allowed: ${describeRange(range, dimension, unit)}.` : '';
+  const word = words
+    ? `Or ${Object.keys(words)
+        .map((item) => `"${item}"`)
+        .join(', ')}.`
+    : '';
+  const left = empty ? `Left out: ${empty}.` : '';
+  const sentences = [note.hint && `${note.hint}.`, allowed, word, left].filter(Boolean);
+  return sentences.length > 0 ? sentences.join(' ') : `${note.label}.`;
 }
 
-const noteIn = (value: unknown): FieldNote | undefined => (value as { metadata?: Note }).metadata?.note;
+/** Bounds of a plain number, as JSON Schema names them. */
+function boundsOf({ range = {} }: FieldNote): Record<string, unknown> {
+  const { above, from, to, below, whole } = range;
+  return {
+    type: whole ? 'integer' : 'number',
+    ...(from === undefined ? {} : { minimum: from }),
+    ...(above === undefined ? {} : { exclusiveMinimum: above }),
+    ...(to === undefined ? {} : { maximum: to }),
+    ...(below === undefined ? {} : { exclusiveMaximum: below }),
+  };
+}
+
+function typeOf(note: FieldNote): Record<string, unknown> {
+  if (!note.dimension) return {};
+  const isNumber = note.dimension === 'dimensionless' && note.unit === undefined;
+  if (isNumber) return { ...boundsOf(note), examples: [Number(exampleOf(note))] };
+  return { type: 'string', examples: [exampleOf(note), ...Object.keys(note.words ?? {})] };
+}
 
 /**
  * JSON Schema (draft 2020-12) of the design file, made from the schema the program itself checks with.
- * Quantities appear as strings whose description states meaning, dimension and allowed range.
+ * Quantities appear as strings whose description states meaning, dimension and allowed range; names of a catalogue as
+ * examples, since other spellings of them are read too. What must fit together is beyond it.
  */
 export function designJsonSchema(): Record<string, unknown> {
-  return toJsonSchema(designSchema, {
+  const schema = toJsonSchema(designSchema, {
     typeMode: 'input',
     target: 'draft-2020-12',
     errorMode: 'ignore',
     overrideSchema: ({ valibotSchema, jsonSchema }) => {
-      const steps = 'pipe' in valibotSchema ? (valibotSchema.pipe as readonly unknown[]) : [];
-      const note = steps.map(noteIn).find((found) => found !== undefined);
+      const found = valibotSchema as unknown as AnySchema;
+      const shapes = alternativesNoteOf(found);
+      if (shapes)
+        return { ...jsonSchema, title: shapes.label, description: `${shapes.hint ?? shapes.label}.` };
+      const note = noteOf(found);
       if (!note) return undefined;
-      const allowed = note.dimension && note.range ? `Allowed: ${describeRange(note.range, note.dimension, note.unit)}.` : '';
-      const words = note.words ? `Or ${Object.keys(note.words).map((word) => `"${word}"`).join(', ')}.` : '';
-      const description = [note.hint, allowed, words].filter(Boolean).join(' ');
-      const custom = (valibotSchema as { type: string }).type === 'custom';
-      const isNumber = custom && note.dimension === 'dimensionless' && !('unit' in note) && jsonSchema.type === undefined && note.words === undefined;
+      const examples = note.catalogue ? { examples: [...note.catalogue] } : {};
       return {
         ...jsonSchema,
-        ...(custom ? { type: isNumber ? ['number', 'string'] : 'string' } : {}),
+        ...typeOf(note),
+        ...examples,
         title: note.label,
-        ...(description ? { description } : {}),
+        description: descriptionOf(note),
       };
     },
-  }) as Record<string, unknown>;
+  });
+  return {
+    ...schema,
+    title: 'Design file',
+    description: 'Everything a person enters. A quantity is text with its unit, such as "150 um" or "12 W".',
+  };
 }

@@ -20,9 +20,7 @@ export interface Constant {
 }
 
 export type HeatFractionRule =
-  | { kind: 'from laser' }
-  | { kind: 'quantum defect' }
-  | { kind: 'measured'; lasing: number; blocked: number };
+  { kind: 'from laser' } | { kind: 'quantum defect' } | { kind: 'measured'; lasing: number; blocked: number };
 
 export interface ResolvedPump {
   /** Light from the diode, before the entrance face, W. */

@@ -1,7 +1,11 @@
 import type { Fault } from '../errors';
-import { formatQuantity, nearestName, parseQuantity, type Dimension } from '../quantity';
+import { formatQuantity, nearestName, parseQuantity } from '../quantity';
+import { constantNote } from './constant-list';
+import { faultAt } from './fault';
 import { fieldsOf, withValue, type Field } from './fields';
+import type { Constant } from './resolved';
 import type { Design } from './schema';
+import { toleratedEnds } from './tolerance';
 
 /** A design value the person gave a tolerance: its low and high in the field's own terms. */
 export interface UncertainField {
@@ -11,61 +15,91 @@ export interface UncertainField {
   high: string | number;
 }
 
-const differenceOf = (dimension: Dimension): Dimension =>
-  dimension === 'temperature' ? 'temperatureDifference' : dimension;
-
-/** Plus-minus of a tolerance text in SI, for a value in SI; null when the text is neither share nor quantity. */
-function halfWidth(text: string, value: number, dimension: Dimension): number | null {
-  if (dimension !== 'temperature') {
-    const share = parseQuantity(text, 'dimensionless');
-    if (share.ok) return Math.abs(share.value * value);
-  }
-  const absolute = parseQuantity(text, differenceOf(dimension));
-  return absolute.ok ? Math.abs(absolute.value) : null;
-}
-
-function siValue(field: Field): number | null {
-  if (typeof field.value === 'number') return field.value;
-  if (field.value === undefined || !field.note.dimension) return null;
-  const parsed = parseQuantity(field.value, field.note.dimension);
+function siValue({ value, note }: Field): number | null {
+  if (typeof value === 'number') return value;
+  if (value === undefined || !note.dimension) return null;
+  const parsed = parseQuantity(value, note.dimension);
   return parsed.ok ? parsed.value : null;
 }
 
-function resolveField(field: Field, tolerance: string): UncertainField | string {
-  const dimension = field.note.dimension;
+/** Ends of a field that holds a number, or in words why it has none. */
+function endsOfField(field: Field, tolerance: string): UncertainField | string {
+  const { path, note, kind } = field;
   const value = siValue(field);
-  if (!dimension || value === null) return 'has no number an uncertainty could apply to';
-  const width = halfWidth(tolerance, value, dimension);
-  if (width === null) return `got "${tolerance}"; a share such as "5 %" or a quantity of the same kind as the value is needed`;
-  const { above = -Infinity, from = -Infinity, to = Infinity, below = Infinity } = field.note.range ?? {};
-  const low = Math.max(value - width, from, above === -Infinity ? above : above + 1e-9 * Math.abs(value));
-  const high = Math.min(value + width, to, below === Infinity ? below : below - 1e-9 * Math.abs(value));
-  const write = (bound: number) => (field.kind === 'number' ? bound : formatQuantity(bound, dimension));
-  return { path: field.path, label: field.note.label, low: write(low), high: write(high) };
+  if (!note.dimension || value === null)
+    return field.value === undefined && note.dimension
+      ? 'this value is left empty, so that an uncertainty has nothing to apply to; enter the value first'
+      : 'this field has no number that an uncertainty could apply to';
+  const ends = toleratedEnds(value, tolerance, note.dimension, note.range ?? {});
+  if (typeof ends === 'string') return ends;
+  const write = (bound: number) =>
+    kind === 'number' ? bound : formatQuantity(bound, note.dimension!, note.unit);
+  return { path, label: note.label, low: write(ends.low), high: write(ends.high) };
 }
 
-/** The tolerances of a checked design as low and high values; those that change nothing are left out. */
+const fieldsByPath = (design: Design) => new Map(fieldsOf(design).map((field) => [field.path, field]));
+
+/**
+ * The tolerances of a checked design that apply to values it gives, as low and high values; those that change nothing
+ * are left out. Those of values left to the catalogue are in the ranges of the constants (`ResolvedDesign.constants`).
+ */
 export function uncertainFields(design: Design): UncertainField[] {
-  const fields = new Map(fieldsOf(design).map((field) => [field.path, field]));
+  const fields = fieldsByPath(design);
   return Object.entries(design.uncertainty).flatMap(([path, tolerance]) => {
     const field = fields.get(path);
-    const resolved = field ? resolveField(field, tolerance) : '';
-    return typeof resolved === 'string' || resolved.low === resolved.high ? [] : [resolved];
+    const ends = field && field.note.range?.whole !== true ? endsOfField(field, tolerance) : '';
+    return typeof ends === 'string' || ends.low === ends.high ? [] : [ends];
   });
 }
 
-/** Faults of the `uncertainty` part: unknown paths, fields without a number, texts that are no tolerance. */
-export function uncertainFaults(design: Design): Fault[] {
-  const fields = new Map(fieldsOf(design).map((field) => [field.path, field]));
+/** The constant a tolerance applies to: named by its own path, or by the empty field that would replace it. */
+const constantOf = (path: string, constants: readonly Constant[]): Constant | undefined =>
+  constants.find((constant) => constant.path === path) ??
+  constants.find((constant) => constant.standing !== 'own' && constantNote(constant.path)?.own === path);
+
+function constantReason({ path, nominal, standing }: Constant, tolerance: string): string | null {
+  const note = constantNote(path)!;
+  if (standing === 'own')
+    return `this constant is entered in the design; give the uncertainty of "${note.own}"`;
+  if (standing === 'common practice') return 'this is an assumption of the model; it takes no uncertainty';
+  const ends = toleratedEnds(nominal, tolerance, note.dimension, note.range);
+  return typeof ends === 'string' ? ends : null;
+}
+
+/** Why the tolerance at a path cannot be taken; null where it can. */
+function reasonAgainst(
+  path: string,
+  tolerance: string,
+  field: Field | undefined,
+  constants: readonly Constant[],
+) {
+  if (field?.value !== undefined) {
+    if (field.note.range?.whole) return 'a count has no uncertainty';
+    const ends = endsOfField(field, tolerance);
+    return typeof ends === 'string' ? ends : null;
+  }
+  const constant = constantOf(path, constants);
+  if (constant) return constantReason(constant, tolerance);
+  const ends = field && endsOfField(field, tolerance);
+  return typeof ends === 'string' ? ends : null;
+}
+
+/**
+ * Faults of the `uncertainty` part: unknown paths, fields without a number, texts that are no tolerance.
+ * @param constants those the design rests on; a tolerance may name one of them
+ */
+export function uncertainFaults(design: Design, constants: readonly Constant[]): Fault[] {
+  const fields = fieldsByPath(design);
+  const known = [...fields.keys(), ...constants.map((constant) => constant.path)];
   return Object.entries(design.uncertainty).flatMap(([path, tolerance]): Fault[] => {
     const at = `uncertainty.${path}`;
-    const field = fields.get(path);
-    if (!field) {
-      const near = nearestName([...fields.keys()], path);
-      return [{ path: at, kind: 'unknown name', message: `${at}: no such field in this design${near ? `; did you mean "${near}"?` : ''}` }];
+    if (!known.includes(path)) {
+      const near = nearestName(known, path);
+      const hint = near ? `did you mean "${near}"?` : 'name a value by its path, such as "pump.radius"';
+      return [faultAt(at, 'unknown name', `this design has no such value; ${hint}`)];
     }
-    const resolved = resolveField(field, tolerance);
-    return typeof resolved === 'string' ? [{ path: at, kind: 'not a quantity', message: `${at}: ${resolved}` }] : [];
+    const reason = reasonAgainst(path, tolerance, fields.get(path), constants);
+    return reason === null ? [] : [faultAt(at, 'not a quantity', reason)];
   });
 }
 
