@@ -1,7 +1,7 @@
 import type { Contributor } from './types';
 
-/** Answers below this share of the nominal one count as this share: the logarithm of zero has no size. */
-const leastShare = 1e-3;
+/** Answers below this share of the nominal one count as this share, and a band that reaches down to it ends at zero. */
+const leastShare = 1e-2;
 
 /** What one uncertain value does to an answer when it stands at its low and at its high end. */
 export interface Effect {
@@ -38,8 +38,9 @@ export function bandOf(nominal: number, effects: readonly Effect[]): Band {
   });
   const size = (item: Contributor) =>
     Math.max(Math.abs(Math.log(item.atLow)), Math.abs(Math.log(item.atHigh)));
+  const lowShare = Math.exp(-Math.sqrt(down));
   return {
-    low: nominal * Math.exp(-Math.sqrt(down)),
+    low: lowShare > 1.001 * leastShare ? nominal * lowShare : 0,
     high: nominal * Math.exp(Math.sqrt(up)),
     contributors: contributors.filter((item) => size(item) > 1e-4).sort((a, b) => size(b) - size(a)),
   };

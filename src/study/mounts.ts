@@ -96,6 +96,19 @@ export function* compareMounts(bench: OptionBench, edges: readonly number[]): Ge
   }
 }
 
-/** Highest ceiling first; equal ceilings by lower peak temperature. */
-export const ranked = (mounts: readonly MountComparison[]): MountComparison[] =>
-  [...mounts].sort((a, b) => (b.ceiling ?? -1) - (a.ceiling ?? -1) || a.peakTemperature - b.peakTemperature);
+/** Ceilings closer than this are as good as equal. */
+const likeShare = 0.005;
+
+/** Highest ceiling first; among ceilings as good as equal, the coolest rod first. */
+export function ranked(mounts: readonly MountComparison[]): MountComparison[] {
+  const byCeiling = [...mounts].sort((a, b) => (b.ceiling ?? -1) - (a.ceiling ?? -1));
+  const groups: MountComparison[][] = [];
+  for (const mount of byCeiling) {
+    const best = groups.at(-1)?.[0]?.ceiling ?? null;
+    const like =
+      mount.ceiling === null ? best === null : best !== null && mount.ceiling > best * (1 - likeShare);
+    if (groups.length > 0 && like) groups.at(-1)!.push(mount);
+    else groups.push([mount]);
+  }
+  return groups.flatMap((group) => group.sort((a, b) => a.peakTemperature - b.peakTemperature));
+}
