@@ -21,10 +21,19 @@ function roundDown(value: number): number {
  * @param length of the cavity, m
  * @param width of the drawing, pixels; `side` is left free at both ends, `half` is the greatest half height of the beam
  */
-export function cavityScale(length: number, picture: CavityPicture, width: number, side: number, half: number): CavityScale {
+export function cavityScale(
+  length: number,
+  picture: CavityPicture,
+  width: number,
+  side: number,
+  half: number,
+): CavityScale {
   const perMetre = Math.max(10, width - 2 * side) / Math.max(length, 1e-6);
   const { sagittal, tangential } = picture.envelopes;
-  const widest = Math.max(1e-5, ...[...sagittal, ...tangential].map((point) => (Number.isFinite(point.radius) ? point.radius : 0)));
+  const widest = Math.max(
+    1e-5,
+    ...[...sagittal, ...tangential].map((point) => (Number.isFinite(point.radius) ? point.radius : 0)),
+  );
   const stretch = roundDown(half / (widest * perMetre));
   return {
     x: (position) => side + position * perMetre,
@@ -35,10 +44,19 @@ export function cavityScale(length: number, picture: CavityPicture, width: numbe
 }
 
 /** Outline of an envelope, both edges, as a closed path. */
-export function envelopePath(points: { position: number; radius: number }[], { x, y }: CavityScale, shrink: number, middle: number): string {
+export function envelopePath(
+  points: { position: number; radius: number }[],
+  { x, y }: CavityScale,
+  shrink: number,
+  middle: number,
+): string {
   const real = points.filter((point) => Number.isFinite(point.radius));
   if (real.length < 2) return '';
-  const upper = real.map((point) => `${x(point.position * shrink).toFixed(1)},${(middle - y(point.radius)).toFixed(1)}`);
-  const lower = [...real].reverse().map((point) => `${x(point.position * shrink).toFixed(1)},${(middle + y(point.radius)).toFixed(1)}`);
+  const upper = real.map(
+    (point) => `${x(point.position * shrink).toFixed(1)},${(middle - y(point.radius)).toFixed(1)}`,
+  );
+  const lower = [...real]
+    .reverse()
+    .map((point) => `${x(point.position * shrink).toFixed(1)},${(middle + y(point.radius)).toFixed(1)}`);
   return `M${upper.join('L')}L${lower.join('L')}Z`;
 }

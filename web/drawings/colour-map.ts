@@ -1,16 +1,17 @@
 /**
  * A sequential colour map whose lightness rises evenly, so that equal steps of temperature look equal and the map survives
- * grey printing and colour blindness: the cube helix (Green 2011, Bull. Astr. Soc. India 39, 289) from deep blue to pale yellow.
+ * grey printing and colour blindness: the cube helix (Green 2011, Bull. Astr. Soc. India 39, 289) from deep blue through red to pale yellow.
  * @param share 0 coldest to 1 hottest
  * @returns red, green, blue 0..255
  */
 export function heatColour(share: number): [number, number, number] {
   const t = Math.min(1, Math.max(0, share));
   const light = 0.1 + 0.86 * t;
-  const angle = 2 * Math.PI * (0.62 - 0.62 * t + 0.04);
-  const depth = 1.25 * light * (1 - light) * 0.5 * 1.35;
+  const angle = 2 * Math.PI * (0.02 + 0.43 * t);
+  const depth = 0.8 * light * (1 - light);
   const [c, s] = [Math.cos(angle), Math.sin(angle)];
-  const channel = (a: number, b: number) => Math.round(255 * Math.min(1, Math.max(0, light + depth * (a * c + b * s))));
+  const channel = (a: number, b: number) =>
+    Math.round(255 * Math.min(1, Math.max(0, light + depth * (a * c + b * s))));
   return [channel(-0.14861, 1.78277), channel(-0.29227, -0.90649), channel(1.97294, 0)];
 }
 

@@ -36,14 +36,25 @@ const sum = (values: number[]) => values.reduce((total, value) => total + value,
  * @param gap between nodes of one column
  * @returns nodes and ribbons; flows that are not positive are left out of the picture (the table shows them)
  */
-export function layOutFlows(ledger: Flow[], across: number, gap: number): { nodes: FlowNode[]; ribbons: Ribbon[]; columns: number } {
+export function layOutFlows(
+  ledger: Flow[],
+  across: number,
+  gap: number,
+): { nodes: FlowNode[]; ribbons: Ribbon[]; columns: number } {
   const flows = ledger.filter((flow) => flow.power > 0 && flow.from !== flow.to);
   const columns = columnsOf(flows);
   const powerOf = (name: string) =>
-    Math.max(sum(flows.filter((f) => f.from === name).map((f) => f.power)), sum(flows.filter((f) => f.to === name).map((f) => f.power)));
+    Math.max(
+      sum(flows.filter((f) => f.from === name).map((f) => f.power)),
+      sum(flows.filter((f) => f.to === name).map((f) => f.power)),
+    );
   const count = Math.max(0, ...columns.values()) + 1;
-  const lanes = Array.from({ length: count }, (_, column) => [...columns].filter(([, at]) => at === column).map(([name]) => name));
-  const scale = Math.min(...lanes.map((lane) => (across - gap * (lane.length - 1)) / Math.max(1e-12, sum(lane.map(powerOf)))));
+  const lanes = Array.from({ length: count }, (_, column) =>
+    [...columns].filter(([, at]) => at === column).map(([name]) => name),
+  );
+  const scale = Math.min(
+    ...lanes.map((lane) => (across - gap * (lane.length - 1)) / Math.max(1e-12, sum(lane.map(powerOf)))),
+  );
   const nodes = new Map<string, FlowNode>();
   lanes.forEach((lane, column) => {
     const filled = sum(lane.map(powerOf)) * scale + gap * (lane.length - 1);
@@ -67,7 +78,35 @@ export function layOutFlows(ledger: Flow[], across: number, gap: number): { node
   const ribbons = bySource.map((flow) => {
     const [source, target] = [nodes.get(flow.from)!, nodes.get(flow.to)!];
     const width = flow.power * scale;
-    return { ...flow, source, target, width, sourceAt: source.from + starts.get(flow)!, targetAt: target.from + take(arriving, flow.to, width) };
+    return {
+      ...flow,
+      source,
+      target,
+      width,
+      sourceAt: source.from + starts.get(flow)!,
+      targetAt: target.from + take(arriving, flow.to, width),
+    };
   });
   return { nodes: [...nodes.values()], ribbons, columns: count };
+}
+
+const characterWidth = 6;
+
+/**
+ * How much higher each node's word is written so that words of one column do not run into each other, for a picture
+ * that flows down the page.
+ */
+export function raisedWords(nodes: FlowNode[]): Map<string, number> {
+  const lifts = new Map<string, number>();
+  const ends = new Map<number, number[]>();
+  for (const node of [...nodes].sort((a, b) => a.from - b.from)) {
+    const half = ((node.name.length + 7) * characterWidth) / 2;
+    const middle = (node.from + node.to) / 2;
+    const lanes = ends.get(node.column) ?? [];
+    const lane = [0, 1, 2].find((line) => (lanes[line] ?? -Infinity) < middle - half) ?? 2;
+    lanes[lane] = middle + half;
+    ends.set(node.column, lanes);
+    lifts.set(node.name, 13 * lane);
+  }
+  return lifts;
 }

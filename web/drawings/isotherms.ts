@@ -11,7 +11,12 @@ export interface Segment {
  * @param sample value at column i, row j
  * @returns segments in units of columns and rows
  */
-export function isotherm(columns: number, rows: number, sample: (i: number, j: number) => number, level: number): Segment[] {
+export function isotherm(
+  columns: number,
+  rows: number,
+  sample: (i: number, j: number) => number,
+  level: number,
+): Segment[] {
   const segments: Segment[] = [];
   const cut = (a: number, b: number) => (level - a) / (b - a);
   for (let j = 0; j + 1 < rows; j += 1)

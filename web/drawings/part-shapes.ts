@@ -34,7 +34,8 @@ function lensPath(x: number, middle: number, converging: boolean): string {
   return `M${x - edge} ${top}Q${x - edge - bulge} ${middle} ${x - edge} ${bottom}L${x + edge} ${bottom}Q${x + edge + bulge} ${middle} ${x + edge} ${top}Z`;
 }
 
-const boxPath = (from: number, to: number, middle: number, high: number) => `M${from} ${middle - high}H${to}V${middle + high}H${from}Z`;
+const boxPath = (from: number, to: number, middle: number, high: number) =>
+  `M${from} ${middle - high}H${to}V${middle + high}H${from}Z`;
 
 /**
  * How an element is drawn: curvature by its sense only (at this scale it could not be seen), heights not to scale.
@@ -55,11 +56,38 @@ export function partShape(design: Design, part: Placed, scale: CavityScale, midd
     const sag = flat ? 0 : inwards * 9 * Math.sign(siOf(radius));
     const number = design.cavity.elements.slice(0, part.place + 1).filter((other) => other.mirror).length;
     const words = flat ? 'flat' : `R ${radius}`;
-    return { ...at, path: mirrorPath(from, middle, sag), name: `mirror ${number}`, label: `Mirror ${number}, ${words}`, short: words };
+    return {
+      ...at,
+      path: mirrorPath(from, middle, sag),
+      name: `mirror ${number}`,
+      label: `Mirror ${number}, ${words}`,
+      short: words,
+    };
   }
   if (element.lens !== undefined)
-    return { ...at, path: lensPath(from, middle, siOf(element.lens) > 0), name: 'lens', label: `Lens, focal length ${element.lens}`, short: `f ${element.lens}`, line: 1 };
+    return {
+      ...at,
+      path: lensPath(from, middle, siOf(element.lens) > 0),
+      name: 'lens',
+      label: `Lens, focal length ${element.lens}`,
+      short: `f ${element.lens}`,
+      line: 1,
+    };
   if (element.plate)
-    return { ...at, path: boxPath(from, Math.max(to, from + 3), middle, half - 8), name: 'plate', label: `Plate, ${element.plate.thickness}`, short: 'plate', line: 1 };
-  return { ...at, path: boxPath(from, Math.max(to, from + 4), middle, half - 22), name: 'rod', label: `Rod, ${design.rod.crystal}, ${design.rod.length}`, short: design.rod.crystal, line: first ? 0 : 1 };
+    return {
+      ...at,
+      path: boxPath(from, Math.max(to, from + 3), middle, half - 8),
+      name: 'plate',
+      label: `Plate, ${element.plate.thickness}`,
+      short: 'plate',
+      line: 1,
+    };
+  return {
+    ...at,
+    path: boxPath(from, Math.max(to, from + 4), middle, half - 22),
+    name: 'rod',
+    label: `Rod, ${design.rod.crystal}, ${design.rod.length}`,
+    short: design.rod.crystal,
+    line: first ? 0 : 1,
+  };
 }

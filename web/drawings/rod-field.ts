@@ -8,7 +8,8 @@ export interface RodReader {
   at: (r: number, z: number) => number;
 }
 
-const centres = (faces: Float64Array) => Float64Array.from({ length: faces.length - 1 }, (_, i) => (faces[i]! + faces[i + 1]!) / 2);
+const centres = (faces: Float64Array) =>
+  Float64Array.from({ length: faces.length - 1 }, (_, i) => (faces[i]! + faces[i + 1]!) / 2);
 
 /** Largest index whose place is not beyond `value`, so that value lies between it and the next. */
 function below(places: Float64Array, value: number): number {
@@ -31,7 +32,8 @@ export function readRod(picture: RodPicture): RodReader {
   const radii = centres(picture.radialFaces);
   const depths = centres(picture.axialFaces);
   const nr = radii.length;
-  const value = (i: number, j: number) => picture.temperatures[Math.min(j, depths.length - 1) * nr + Math.min(i, nr - 1)]!;
+  const value = (i: number, j: number) =>
+    picture.temperatures[Math.min(j, depths.length - 1) * nr + Math.min(i, nr - 1)]!;
   const at = (r: number, z: number) => {
     const i = below(radii, Math.abs(r));
     const j = below(depths, z);

@@ -18,12 +18,41 @@ export interface RodView {
   rAt: (y: number) => number;
 }
 
+/** A place in the section, m; r of either sign. */
+export interface Probe {
+  r: number;
+  z: number;
+}
+
+/** The place a key press moves the reading to, or null where the key means nothing here. */
+export function movedProbe(event: KeyboardEvent, place: Probe, view: RodView): Probe | null {
+  const share = event.shiftKey ? 0.1 : 0.01;
+  const [across, along] = [share * view.reach, share * view.length];
+  const moves: Record<string, [number, number]> = {
+    ArrowRight: [0, along],
+    ArrowLeft: [0, -along],
+    ArrowUp: [across, 0],
+    ArrowDown: [-across, 0],
+  };
+  const move = moves[event.key];
+  if (!move) return null;
+  const clamp = (value: number, low: number, high: number) => Math.min(high, Math.max(low, value));
+  return {
+    r: clamp(place.r + move[0], -view.reach, view.reach),
+    z: clamp(place.z + move[1], 0, view.length),
+  };
+}
+
 export function rodView(picture: RodPicture, width: number, height: number, wholeMount: boolean): RodView {
   const length = picture.axialFaces.at(-1) ?? 1;
   const outer = picture.radialFaces.at(-1) ?? 1;
   const reach = wholeMount ? outer : Math.min(outer, 1.3 * picture.rodRadius);
   return {
-    reader: readRod(picture), width, height, reach, length,
+    reader: readRod(picture),
+    width,
+    height,
+    reach,
+    length,
     x: (z) => (z / length) * width,
     y: (r) => height / 2 - (r / reach) * (height / 2),
     zAt: (x) => (Math.min(width, Math.max(0, x)) / width) * length,
@@ -34,7 +63,12 @@ export function rodView(picture: RodPicture, width: number, height: number, whol
 const table = heatTable();
 
 /** Paints the temperatures as an image of one pixel per drawing unit. */
-export function paintRod(context: CanvasRenderingContext2D, view: RodView, lowest: number, highest: number): void {
+export function paintRod(
+  context: CanvasRenderingContext2D,
+  view: RodView,
+  lowest: number,
+  highest: number,
+): void {
   const [columns, rows] = [Math.max(1, Math.round(view.width)), Math.max(2, Math.round(view.height))];
   const image = context.createImageData(columns, rows);
   const half = Math.ceil(rows / 2);
@@ -73,15 +107,23 @@ export function drawIsotherms(view: RodView, lowest: number, highest: number): D
   const values = new Float64Array(columns * rows);
   for (let j = 0; j < rows; j += 1)
     for (let i = 0; i < columns; i += 1)
-      values[j * columns + i] = view.reader.at(view.rAt((j / (rows - 1)) * view.height), (i / (columns - 1)) * view.length) - kelvin;
+      values[j * columns + i] =
+        view.reader.at(view.rAt((j / (rows - 1)) * view.height), (i / (columns - 1)) * view.length) - kelvin;
   const toX = (i: number) => (i / (columns - 1)) * view.width;
   const toY = (j: number) => (j / (rows - 1)) * view.height;
   let last = Infinity;
   return niceTicks(lowest - kelvin, highest - kelvin, 8).map((level) => {
     const pieces = isotherm(columns, rows, (i, j) => values[j * columns + i]!, level);
-    const path = pieces.map(({ x1, y1, x2, y2 }) => `M${toX(x1).toFixed(1)} ${toY(y1).toFixed(1)}L${toX(x2).toFixed(1)} ${toY(y2).toFixed(1)}`).join('');
+    const path = pieces
+      .map(
+        ({ x1, y1, x2, y2 }) =>
+          `M${toX(x1).toFixed(1)} ${toY(y1).toFixed(1)}L${toX(x2).toFixed(1)} ${toY(y2).toFixed(1)}`,
+      )
+      .join('');
     const middle = (rows - 1) / 2;
-    const crossings = pieces.filter(({ y1, y2 }) => (y1 - middle) * (y2 - middle) <= 0).map(({ x1 }) => toX(x1));
+    const crossings = pieces
+      .filter(({ y1, y2 }) => (y1 - middle) * (y2 - middle) <= 0)
+      .map(({ x1 }) => toX(x1));
     const at = crossings.length > 0 ? Math.max(...crossings) : null;
     const clear = at !== null && at > 22 && at < view.width - 18 && Math.abs(last - at) > 36;
     if (clear) last = at;

@@ -1,5 +1,15 @@
 const superscript: Record<string, string> = {
-  '-': '⁻', '0': '⁰', '1': '¹', '2': '²', '3': '³', '4': '⁴', '5': '⁵', '6': '⁶', '7': '⁷', '8': '⁸', '9': '⁹',
+  '-': '⁻',
+  '0': '⁰',
+  '1': '¹',
+  '2': '²',
+  '3': '³',
+  '4': '⁴',
+  '5': '⁵',
+  '6': '⁶',
+  '7': '⁷',
+  '8': '⁸',
+  '9': '⁹',
 };
 
 const minus = (text: string) => text.replace('-', '−');
@@ -25,4 +35,10 @@ export function significant(value: number | null | undefined, digits = 3): strin
 export function percent(value: number | null | undefined, digits = 3): string {
   if (value === null || value === undefined || !Number.isFinite(value)) return 'none';
   return `${significant(value * 100, digits)} %`;
+}
+
+/** A number on an axis: three significant digits at most, no trailing zeros. */
+export function axisNumber(value: number): string {
+  const text = significant(value, 3);
+  return text.includes('.') && !text.includes('×') ? text.replace(/0+$/, '').replace(/\.$/, '') : text;
 }

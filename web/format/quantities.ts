@@ -14,18 +14,51 @@ function prefixed(value: Given, unit: string, steps: [number, string][], digits:
 }
 
 export function power(value: Given, digits = 3): string {
-  return prefixed(value, 'W', [[1e3, 'k'], [1, ''], [1e-3, 'm'], [1e-6, 'µ']].map(asStep), digits);
+  return prefixed(
+    value,
+    'W',
+    [
+      [1e3, 'k'],
+      [1, ''],
+      [1e-3, 'm'],
+      [1e-6, 'µ'],
+    ].map(asStep),
+    digits,
+  );
 }
 
 export function length(value: Given, digits = 3): string {
-  return prefixed(value, 'm', [[1, ''], [1e-3, 'm'], [1e-6, 'µ'], [1e-9, 'n']].map(asStep), digits);
+  return prefixed(
+    value,
+    'm',
+    [
+      [1, ''],
+      [1e-3, 'm'],
+      [1e-6, 'µ'],
+      [1e-9, 'n'],
+    ].map(asStep),
+    digits,
+  );
 }
 
 export function stress(value: Given, digits = 3): string {
-  return prefixed(value, 'Pa', [[1e9, 'G'], [1e6, 'M'], [1e3, 'k'], [1, '']].map(asStep), digits);
+  return prefixed(
+    value,
+    'Pa',
+    [
+      [1e9, 'G'],
+      [1e6, 'M'],
+      [1e3, 'k'],
+      [1, ''],
+    ].map(asStep),
+    digits,
+  );
 }
 
-const asStep = ([factor, prefix]: (string | number)[]): [number, string] => [factor as number, prefix as string];
+const asStep = ([factor, prefix]: (string | number)[]): [number, string] => [
+  factor as number,
+  prefix as string,
+];
 
 /** Kelvin in, degrees Celsius out, to a tenth below 200 °C. */
 export function temperature(kelvin: Given): string {
@@ -48,7 +81,16 @@ export function wavelength(value: Given): string {
 }
 
 export function mass(kilograms: Given): string {
-  return prefixed(kilograms === null || kilograms === undefined ? kilograms : kilograms * 1e3, 'g', [[1e3, 'k'], [1, ''], [1e-3, 'm']].map(asStep), 3);
+  return prefixed(
+    kilograms === null || kilograms === undefined ? kilograms : kilograms * 1e3,
+    'g',
+    [
+      [1e3, 'k'],
+      [1, ''],
+      [1e-3, 'm'],
+    ].map(asStep),
+    3,
+  );
 }
 
 /** Round-trip stability m; the sign counts. */
@@ -68,6 +110,7 @@ export function withUnit(value: Given, unit: string, digits = 3): string {
 
 /** Value of a limit: temperatures are shown in degrees Celsius, everything else in its own unit. */
 export function limitValue(limit: string, value: Given, unit: string): string {
+  if (limit === 'steady state') return value === 1 ? 'exists' : 'none';
   const isTemperature = unit === 'K' && /temperature|dew point|case window/.test(limit);
   return isTemperature ? temperature(value) : withUnit(value, unit);
 }
@@ -75,4 +118,9 @@ export function limitValue(limit: string, value: Given, unit: string): string {
 /** "5.8 to 19 W", or null while the band is not known. */
 export function band(low: Given, high: Given): string | null {
   return finite(low) && finite(high) ? `${significant(low)} to ${power(high)}` : null;
+}
+
+/** Distance from a bound: a temperature difference where the limit is a temperature. */
+export function marginValue(margin: number, unit: string): string {
+  return unit === 'K' ? rise(margin) : withUnit(margin, unit);
 }

@@ -1,4 +1,8 @@
-const pretty = (text: string) => text.replace(/deg([CF])/g, '°$1').replace(/\bum\b/g, 'µm').replace(/(^|\s)-(?=\d)/g, '$1−');
+const pretty = (text: string) =>
+  text
+    .replace(/deg([CF])/g, '°$1')
+    .replace(/\bum\b/g, 'µm')
+    .replace(/(^|\s)-(?=\d)/g, '$1−');
 
 /** An allowed range with its unit said once: "-70 degC to 200 degC" becomes "−70 to 200 °C". */
 export function shortRange(allowed: string): string {

@@ -29,16 +29,63 @@ export interface Dressing {
   yRange?: [number, number];
 }
 
-export const colourOf = (name: string) => getComputedStyle(document.documentElement).getPropertyValue(name).trim();
+/** Everything a chart on the page shows. */
+export interface ChartContent {
+  name: string;
+  /** What the curve shows, in a sentence, for those who do not see it. */
+  summary: string;
+  xName: string;
+  x: ArrayLike<number>;
+  xWrite: (value: number) => string;
+  xTick: (value: number) => string;
+  yTick: (value: number) => string;
+  lines: Line[];
+  dressing?: Dressing;
+  height?: number;
+  /** Charts with the same key share their cursor. */
+  sync?: string;
+  /** Where the reading stands while nothing is pointed at. */
+  rest: number;
+}
 
-function fill(chart: uPlot, left: number, top: number, right: number, bottom: number, colour: string, alpha: number): void {
+/** Where a key press moves the reading, or null where the key means nothing here. */
+export function readingStep(event: KeyboardEvent, index: number, count: number): number | null {
+  const step = event.shiftKey ? 10 : 1;
+  const targets: Record<string, number> = {
+    ArrowRight: index + step,
+    ArrowUp: index + step,
+    ArrowLeft: index - step,
+    ArrowDown: index - step,
+    Home: 0,
+    End: count - 1,
+  };
+  const to = targets[event.key];
+  return to === undefined ? null : Math.max(0, Math.min(count - 1, to));
+}
+
+const colourOf = (name: string) => getComputedStyle(document.documentElement).getPropertyValue(name).trim();
+
+function fill(
+  chart: uPlot,
+  left: number,
+  top: number,
+  right: number,
+  bottom: number,
+  colour: string,
+  alpha: number,
+): void {
   const { ctx, bbox } = chart;
   const x = Math.max(bbox.left, left);
   const y = Math.max(bbox.top, top);
   ctx.save();
   ctx.globalAlpha = alpha;
   ctx.fillStyle = colour;
-  ctx.fillRect(x, y, Math.min(bbox.left + bbox.width, right) - x, Math.min(bbox.top + bbox.height, bottom) - y);
+  ctx.fillRect(
+    x,
+    y,
+    Math.min(bbox.left + bbox.width, right) - x,
+    Math.min(bbox.top + bbox.height, bottom) - y,
+  );
   ctx.restore();
 }
 
@@ -48,7 +95,16 @@ function dress(chart: uPlot, { marks, span, shelf }: Dressing): void {
     const [top, bottom] = [chart.valToPos(shelf.to, 'y', true), chart.valToPos(shelf.from, 'y', true)];
     fill(chart, bbox.left, top, bbox.left + bbox.width, bottom, colourOf(shelf.colour), 0.16);
   }
-  if (span) fill(chart, chart.valToPos(span.from, 'x', true), bbox.top, chart.valToPos(span.to, 'x', true), bbox.top + bbox.height, colourOf(span.colour), 0.14);
+  if (span)
+    fill(
+      chart,
+      chart.valToPos(span.from, 'x', true),
+      bbox.top,
+      chart.valToPos(span.to, 'x', true),
+      bbox.top + bbox.height,
+      colourOf(span.colour),
+      0.14,
+    );
   for (const mark of marks) {
     const x = chart.valToPos(mark.x, 'x', true);
     if (x < bbox.left || x > bbox.left + bbox.width) continue;
@@ -64,7 +120,7 @@ function dress(chart: uPlot, { marks, span, shelf }: Dressing): void {
   }
 }
 
-export interface ChartOrder {
+interface ChartOrder {
   lines: Line[];
   xTick: (value: number) => string;
   yTick: (value: number) => string;
@@ -103,7 +159,10 @@ export class ChartHandle {
     const left = index === null ? -10 : chart.valToPos(chart.data[0][index] ?? 0, 'x');
     chart.setCursor({ left, top: index === null ? -10 : 1 });
     const { width, height } = chart.over.getBoundingClientRect();
-    if (this.order.sync) uPlot.sync(this.order.sync).pub('mousemove', chart, left, index === null ? -10 : 1, width, height, index ?? 0);
+    if (this.order.sync)
+      uPlot
+        .sync(this.order.sync)
+        .pub('mousemove', chart, left, index === null ? -10 : 1, width, height, index ?? 0);
   }
 
   destroy(): void {
@@ -127,7 +186,10 @@ export class ChartHandle {
       legend: { show: false },
       padding: [8, 12, 0, 0],
       cursor: { y: false, drag: { x: false, y: false }, sync: order.sync ? { key: order.sync } : undefined },
-      scales: { x: { time: false }, y: { range: (_, low, high) => this.dressing.yRange ?? roomy(low, high) } },
+      scales: {
+        x: { time: false },
+        y: { range: (_, low, high) => this.dressing.yRange ?? roomy(low, high) },
+      },
       axes: [axis(order.xTick, 26), axis(order.yTick, 48)],
       series: [{}, ...order.lines.map(asSeries)],
       hooks: {

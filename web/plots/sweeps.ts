@@ -1,5 +1,5 @@
 import type { Report, SweepPoint } from '../../src/report/types';
-import { percent, significant } from '../format/number';
+import { percent, axisNumber, significant } from '../format/number';
 import { lensPower, power, stability, temperature } from '../format/quantities';
 import type { Dressing, Line } from './chart';
 
@@ -20,14 +20,25 @@ export interface Sweep {
 }
 
 const kelvin = 273.15;
-const plain = (value: number) => significant(value, 3).replace(/\.0+$/, '');
+const plain = axisNumber;
 const finite = (value: number | null) => (value !== null && Number.isFinite(value) ? value : null);
 
 /** Stability of both planes against pump power; far outside the curve is cut, since only the edge matters. */
 export function stabilityLines(points: SweepPoint[]): Line[] {
   return [
-    { name: 'sagittal m', values: points.map((point) => finite(point.sagittalStability)), colour: '--sagittal', write: stability },
-    { name: 'tangential m', values: points.map((point) => finite(point.tangentialStability)), colour: '--tangential', dash: [7, 4], write: stability },
+    {
+      name: 'sagittal m',
+      values: points.map((point) => finite(point.sagittalStability)),
+      colour: '--sagittal',
+      write: stability,
+    },
+    {
+      name: 'tangential m',
+      values: points.map((point) => finite(point.tangentialStability)),
+      colour: '--tangential',
+      dash: [7, 4],
+      write: stability,
+    },
   ];
 }
 
@@ -45,13 +56,25 @@ export function stabilityDressing(report: Report, place: (pumpPower: number) => 
 }
 
 function chartsOf(points: SweepPoint[], report: Report, place: (pumpPower: number) => number): SweepChart[] {
-  const line = (name: string, value: (point: SweepPoint) => number | null, colour: string, write: Line['write'], dash?: number[]): Line => ({
-    name, values: points.map((point) => finite(value(point))), colour, write, dash,
+  const line = (
+    name: string,
+    value: (point: SweepPoint) => number | null,
+    colour: string,
+    write: Line['write'],
+    dash?: number[],
+  ): Line => ({
+    name,
+    values: points.map((point) => finite(value(point))),
+    colour,
+    write,
+    dash,
   });
   const celsius = (value: number | null) => temperature(value === null ? null : value + kelvin);
   return [
     {
-      name: 'Peak temperature', summary: 'Hottest place of the rod, lasing and with the beam blocked.', yTick: (value) => `${plain(value)}°`,
+      name: 'Peak temperature',
+      summary: 'Hottest place of the rod, lasing and with the beam blocked.',
+      yTick: (value) => `${plain(value)}°`,
       lines: [
         line('lasing', (point) => point.peakTemperature - kelvin, '--limit', celsius),
         line('blocked', (point) => point.blockedPeakTemperature - kelvin, '--heat', celsius, [7, 4]),
@@ -59,21 +82,52 @@ function chartsOf(points: SweepPoint[], report: Report, place: (pumpPower: numbe
       ],
     },
     {
-      name: 'Lens power', summary: 'Dioptric power of the rod, positive converging.', yTick: plain,
+      name: 'Lens power',
+      summary: 'Dioptric power of the rod, positive converging.',
+      yTick: plain,
       lines: [
         line('seen by the mode', (point) => point.dioptricPower, '--ink', lensPower),
         line('on the axis', (point) => point.axisDioptricPower, '--soft', lensPower, [7, 4]),
       ],
     },
-    { name: 'Round-trip stability', summary: 'Stable between minus one and one.', yTick: plain, lines: stabilityLines(points), dressing: stabilityDressing(report, place) },
     {
-      name: 'Mode over pump radius', summary: 'Mode radius in the rod over the pump radius; a gap where there is no mode.', yTick: plain,
-      lines: [line('ratio', (point) => point.modeToPumpRatio, '--sagittal', (value) => (value === null ? 'no mode' : significant(value)))],
+      name: 'Round-trip stability',
+      summary: 'Stable between minus one and one.',
+      yTick: plain,
+      lines: stabilityLines(points),
+      dressing: stabilityDressing(report, place),
     },
-    { name: 'Laser output', summary: 'Output power.', yTick: plain, lines: [line('output', (point) => point.outputPower, '--holds', power)] },
     {
-      name: 'Smallest margin', summary: 'Smallest margin of all limits, as a share of its room; below zero a limit is broken.', yTick: (value) => `${plain(100 * value)}%`,
-      lines: [line('margin', (point) => Math.max(-1, point.worstShare), '--limit', (value) => percent(value))],
+      name: 'Mode over pump radius',
+      summary: 'Mode radius in the rod over the pump radius; a gap where there is no mode.',
+      yTick: plain,
+      lines: [
+        line(
+          'ratio',
+          (point) => point.modeToPumpRatio,
+          '--sagittal',
+          (value) => (value === null ? 'no mode' : significant(value)),
+        ),
+      ],
+    },
+    {
+      name: 'Laser output',
+      summary: 'Output power.',
+      yTick: plain,
+      lines: [line('output', (point) => point.outputPower, '--holds', power)],
+    },
+    {
+      name: 'Smallest margin',
+      summary: 'Smallest margin of all limits, as a share of its room; below zero a limit is broken.',
+      yTick: (value) => `${plain(100 * value)}%`,
+      lines: [
+        line(
+          'margin',
+          (point) => Math.max(-1, point.worstShare),
+          '--limit',
+          (value) => percent(value),
+        ),
+      ],
       dressing: { shelf: { from: 0, to: 1, colour: '--holds' }, yRange: [-1, 1] },
     },
   ];
@@ -96,9 +150,16 @@ export function sweepOf(report: Report, axis: 'incident' | 'absorbed'): Sweep {
   // Marks are known in incident power; on the absorbed axis they stand where the sweep passes them.
   const place = (pumpPower: number) => {
     if (axis === 'incident') return pumpPower;
-    const at = Math.max(1, incident.findIndex((value) => value >= pumpPower));
+    const at = Math.max(
+      1,
+      incident.findIndex((value) => value >= pumpPower),
+    );
     const [left, right] = [incident[at - 1] ?? 0, incident[at] ?? 1];
     return (x[at - 1] ?? 0) + ((x[at] ?? 0) - (x[at - 1] ?? 0)) * ((pumpPower - left) / (right - left || 1));
   };
-  return { x, rest: nearestIndex(incident, report.operating.pumpPower), charts: chartsOf(points, report, place) };
+  return {
+    x,
+    rest: nearestIndex(incident, report.operating.pumpPower),
+    charts: chartsOf(points, report, place),
+  };
 }

@@ -52,7 +52,11 @@ function resized(design: Design, place: number, change: number): Design {
   const length = Math.max(0, read.value + change);
   const inUnit = convertTo(length, read.unit, 'length');
   const places = Math.max(0, Math.ceil(Math.log10(convertTo(1e-3, read.unit, 'length') ** -1)) + 1);
-  return withValue(design, `cavity.elements.${place}.space`, `${Number(inUnit.toFixed(places))} ${read.unit}`);
+  return withValue(
+    design,
+    `cavity.elements.${place}.space`,
+    `${Number(inUnit.toFixed(places))} ${read.unit}`,
+  );
 }
 
 /**
@@ -61,7 +65,8 @@ function resized(design: Design, place: number, change: number): Design {
  */
 export function withMoved(design: Design, place: number, shift: number): Design {
   const { grows, shrinks } = spacesBeside(design, place);
-  const room = (at: number | undefined) => (at === undefined ? Infinity : lengthOf(design.cavity.elements[at]?.space));
+  const room = (at: number | undefined) =>
+    at === undefined ? Infinity : lengthOf(design.cavity.elements[at]?.space);
   const allowed = Math.min(Math.max(shift, -room(grows)), room(shrinks));
   let next = design;
   if (grows !== undefined) next = resized(next, grows, allowed);

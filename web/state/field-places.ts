@@ -34,15 +34,6 @@ export function placeOf(path: string): FieldPlace {
   return rules.find(([pattern]) => pattern.test(path))?.[1] ?? 'limits';
 }
 
-/** Catalogue that offers names for a field, as the id of its list on the page. */
-export function catalogueFor(path: string): string | undefined {
-  if (path === 'rod.crystal') return 'catalogue-crystals';
-  if (path === 'mount.material' || path.endsWith('.sink.material')) return 'catalogue-mounts';
-  if (path === 'mount.interface.kind') return 'catalogue-interfaces';
-  if (path.endsWith('.coolant')) return 'catalogue-coolants';
-  return path.endsWith('.hotSide') ? 'catalogue-coolers' : undefined;
-}
-
 /** A field that has no meaning in the design as it stands, such as the side of a round rod. */
 export function isIdle(field: Field, value: (path: string) => unknown): boolean {
   const shape = value('rod.section.shape');

@@ -7,8 +7,6 @@ export function undoKey(event: KeyboardEvent, bench: Workbench): void {
   const redo = (key === 'z' && event.shiftKey) || key === 'y';
   if (key !== 'z' && !redo) return;
   event.preventDefault();
-  // A field shows what was typed while it has the focus; leaving it lets it show the design again.
-  if (document.activeElement instanceof HTMLInputElement) document.activeElement.blur();
   if (redo) bench.redo();
   else bench.undo();
 }

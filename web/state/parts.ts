@@ -24,18 +24,32 @@ const withElements = (design: Design, elements: ElementDesign[]): Design => ({
 });
 
 /** An element before the one at `place`: a new one of a kind, or one that is given. */
-export function withNewElement(design: Design, place: number, kind: ElementKind, element = newElement[kind]): Design {
+export function withNewElement(
+  design: Design,
+  place: number,
+  kind: ElementKind,
+  element = newElement[kind],
+): Design {
   const { elements } = design.cavity;
   return withElements(design, [...elements.slice(0, place), element, ...elements.slice(place)]);
 }
 
 export function withoutElement(design: Design, place: number): Design {
-  return withElements(design, design.cavity.elements.filter((_, other) => other !== place));
+  return withElements(
+    design,
+    design.cavity.elements.filter((_, other) => other !== place),
+  );
 }
 
 const sink = {
-  width: '80 mm', height: '80 mm', finHeight: '25 mm', finCount: 20, finThickness: '1 mm',
-  material: 'aluminium 6061', emissivity: 0.85, orientation: 'vertical' as const,
+  width: '80 mm',
+  height: '80 mm',
+  finHeight: '25 mm',
+  finCount: 20,
+  finThickness: '1 mm',
+  material: 'aluminium 6061',
+  emissivity: 0.85,
+  orientation: 'vertical' as const,
 };
 
 function newCooler(kind: CoolerDesign['kind'], id: string, hotSide: string): CoolerDesign {
@@ -46,13 +60,21 @@ function newCooler(kind: CoolerDesign['kind'], id: string, hotSide: string): Coo
       return { id, kind, sink, fan: { freeFlow: '60 m^3/h', shutOffPressure: '45 Pa', power: '3 W' } };
     case 'liquid':
       return {
-        id, kind, coolant: 'water', channel: { diameter: '4 mm', length: '160 mm', parallel: 1 }, flow: '1 L/min',
+        id,
+        kind,
+        coolant: 'water',
+        channel: { diameter: '4 mm', length: '160 mm', parallel: 1 },
+        flow: '1 L/min',
         supply: { kind: 'chiller', setPoint: '20 degC', capacity: '300 W' },
       };
     case 'tec':
       return {
-        id, kind, module: { couples: 127, legSide: '1.4 mm', legHeight: '1.6 mm', count: 1 },
-        setTemperature: '20 degC', highestCurrent: '5 A', hotSide,
+        id,
+        kind,
+        module: { couples: 127, legSide: '1.4 mm', legHeight: '1.6 mm', count: 1 },
+        setTemperature: '20 degC',
+        highestCurrent: '5 A',
+        hotSide,
       };
     case 'resistance':
       return { id, kind, resistance: '0.5 K/W' };
@@ -71,5 +93,9 @@ export function withNewCooler(design: Design, kind: CoolerDesign['kind']): Desig
 export function withoutCooler(design: Design, place: number): Design {
   const coolers = design.coolers.filter((_, other) => other !== place);
   const gone = design.coolers[place]!.id;
-  return { ...design, coolers, chosenCooler: design.chosenCooler === gone ? coolers[0]?.id : design.chosenCooler };
+  return {
+    ...design,
+    coolers,
+    chosenCooler: design.chosenCooler === gone ? coolers[0]?.id : design.chosenCooler,
+  };
 }

@@ -16,7 +16,8 @@ export function niceTicks(from: number, to: number, count: number): number[] {
   const decade = 10 ** Math.floor(Math.log10(raw));
   const step = decade * niceSteps.find((size) => size * decade >= raw * 0.999)!;
   const ticks: number[] = [];
-  for (let tick = Math.ceil(from / step - 1e-9); tick * step <= to + 1e-9 * step; tick += 1) ticks.push(tick * step);
+  for (let tick = Math.ceil(from / step - 1e-9); tick * step <= to + 1e-9 * step; tick += 1)
+    ticks.push(tick * step + 0);
   return ticks;
 }
 
@@ -29,9 +30,15 @@ export function pumpAxis(to: number): PumpAxis {
  * band and the cavity edge, but no further than was searched, so that small ceilings are not squeezed into a corner.
  */
 export function axisEnd(report: Report, pumpPower: number): number {
-  const ceilings = report.options.flatMap(({ ceiling }) => (ceiling.reachesRange ? [] : [ceiling.high ?? ceiling.pumpPower ?? 0]));
+  const ceilings = report.options.flatMap(({ ceiling }) =>
+    ceiling.reachesRange ? [] : [ceiling.high ?? ceiling.pumpPower ?? 0],
+  );
   const edge = report.cavityEdge.high ?? report.cavityEdge.pumpPower ?? 0;
-  const wanted = Math.max(1.25 * pumpPower, ...ceilings.map((power) => 1.12 * power), Math.min(1.1 * edge, 3 * pumpPower));
+  const wanted = Math.max(
+    1.25 * pumpPower,
+    ...ceilings.map((power) => 1.12 * power),
+    Math.min(1.1 * edge, 3 * pumpPower),
+  );
   const reach = Math.max(Math.min(wanted, 1.05 * report.searchedTo), 1.1 * pumpPower, 1e-3);
   const step = niceTicks(0, reach, 8);
   const size = (step[1] ?? reach) - (step[0] ?? 0);

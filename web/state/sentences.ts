@@ -1,5 +1,5 @@
 import type { MountReport, Report } from '../../src/report/types';
-import { band, lensPower, power, rise, temperature } from '../format/quantities';
+import { band, lensPower, length, power, rise, temperature } from '../format/quantities';
 import { percent } from '../format/number';
 
 /** The answer to each section's question, in one or two plain sentences. */
@@ -17,20 +17,24 @@ export function cavitySentence(report: Report): string {
 }
 
 export function windowSentence(report: Report): string {
-  if (report.usableWindow.length === 0) return 'No usable window: the cavity is stable at no pump power that was searched.';
-  const spans = report.usableWindow.map(({ fromPumpPower, toPumpPower }) => `${power(fromPumpPower)} to ${power(toPumpPower)}`);
+  if (report.usableWindow.length === 0)
+    return 'No usable window: the cavity is stable at no pump power that was searched.';
+  const spans = report.usableWindow.map(
+    ({ fromPumpPower, toPumpPower }) => `${power(fromPumpPower)} to ${power(toPumpPower)}`,
+  );
   return `Usable window: ${spans.join(', and ')}.`;
 }
 
 export function rodSentence(report: Report): string {
   const { rod, heatLoad } = report.operating;
-  const depth = (rod.peakPosition.z * 1e3).toFixed(2);
+  const deep = rod.peakPosition.z > 5e-5;
+  const place = deep ? `${length(rod.peakPosition.z)} behind the pumped face` : 'at the pumped face';
   const hotter = report.blocked.rod.peakTemperature - rod.peakTemperature;
   const blocked =
     Math.abs(hotter) < 0.05
       ? 'Blocking the beam changes that by less than 0.1 K.'
       : `With the beam blocked it is ${rise(Math.abs(hotter))} ${hotter > 0 ? 'hotter' : 'cooler'}.`;
-  return `${power(heatLoad)} of heat make ${temperature(rod.peakTemperature)} at the hottest place, ${depth} mm behind the pumped face. ${blocked}`;
+  return `${power(heatLoad)} of heat make ${temperature(rod.peakTemperature)} at the hottest place, ${place}. ${blocked}`;
 }
 
 const spreadOf = (values: number[]) => Math.max(...values) - Math.min(...values);
@@ -41,12 +45,14 @@ export function mountSentence(mounts: MountReport[]): string {
   const middle = Math.abs(lens.reduce((sum, value) => sum + value, 0) / lens.length);
   const share = middle > 0 ? spreadOf(lens) / middle : 0;
   const peak = spreadOf(mounts.map((mount) => mount.peakTemperature));
-  const verdict = share < 0.05 ? 'the lens hardly changes with the mount' : 'here the mount moves the lens too';
+  const verdict =
+    share < 0.05 ? 'the lens hardly changes with the mount' : 'here the mount moves the lens too';
   return `From the best to the worst of these ${mounts.length} materials the peak temperature moves by ${rise(peak)}, the lens by ${percent(share, 2)}: ${verdict}.`;
 }
 
 export function ledgerSentence(report: Report): string {
   const { electricalPower, outputPower, diode, heatLoad } = report.operating;
-  const ratio = heatLoad > 0 ? ` The diode makes ${(diode.heat / heatLoad).toFixed(1)} times the heat of the rod.` : '';
+  const ratio =
+    heatLoad > 0 ? ` The diode makes ${(diode.heat / heatLoad).toFixed(1)} times the heat of the rod.` : '';
   return `${power(electricalPower)} from the wall give ${power(outputPower)} of laser light; ${power(diode.heat)} of heat come from the diode and ${power(heatLoad)} from the rod.${ratio}`;
 }

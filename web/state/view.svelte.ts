@@ -29,11 +29,21 @@ export class View {
     const query = matchMedia('(prefers-color-scheme: dark)');
     const follow = () => (this.system = query.matches ? 'dark' : 'light');
     follow();
-    query.addEventListener('change', follow);
+    query.addEventListener('change', () => {
+      follow();
+      this.apply();
+    });
+    this.apply();
+  }
+
+  /** At once, since drawings on canvas read their colours from the page. */
+  private apply(): void {
+    document.documentElement.dataset.theme = this.theme;
   }
 
   toggleTheme(): void {
     this.chosen = this.theme === 'dark' ? 'light' : 'dark';
+    this.apply();
     try {
       localStorage.setItem(storageKey, this.chosen);
     } catch {

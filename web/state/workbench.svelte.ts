@@ -76,12 +76,16 @@ export class Workbench {
     this.change(withValue(this.design, path, value), name, `${path}${dragging ? ' drag' : ''}`, dragging);
   }
 
-  /** Takes what was typed into a field; a bare number is taken as a number where the field wants one. */
-  enter(field: Field, text: string): void {
+  /**
+   * Takes what was typed into a field; a bare number is taken as a number where the field wants one.
+   * @returns the value of the design that it led to, as text
+   */
+  enter(field: Field, text: string): string {
     const bare = text.trim() !== '' && Number.isFinite(Number(text));
-    const wantsNumber = bare && field.note.dimension === 'dimensionless' && this.accepts(field.path, Number(text));
     const empty = text.trim() === '' && field.optional;
-    this.set(field.path, empty ? undefined : wantsNumber ? Number(text) : text, field.note.label);
+    const value = empty ? undefined : field.kind === 'number' && bare ? Number(text) : text;
+    this.set(field.path, value, field.note.label);
+    return value === undefined ? '' : String(value);
   }
 
   undo(): void {
@@ -127,12 +131,11 @@ export class Workbench {
 
   /** Whether a value is another one than in the file last opened or saved. */
   differsFromSaved(path: string): boolean {
-    return this.saved !== null && this.saved !== this.design && valueAt(this.saved, path) !== valueAt(this.design, path);
-  }
-
-  private accepts(path: string, value: unknown): boolean {
-    const checked = checkDesign(withValue(this.design, path, value));
-    return checked.ok || !checked.faults.some((fault) => fault.path === path);
+    return (
+      this.saved !== null &&
+      this.saved !== this.design &&
+      valueAt(this.saved, path) !== valueAt(this.design, path)
+    );
   }
 
   private request(dragging: boolean): void {
