@@ -76,7 +76,8 @@ type LinkSet = Pick<RodConduction, 'side' | 'front' | 'back' | 'mountOut'>;
 
 /** Conductance of a link linearised at a surface where dT/dtheta = slope, W/K. */
 export function linkConductance(links: Links, index: number, slope: number): number {
-  return 1 / (links.inner[index]! + links.outer[index]! / slope);
+  const outer = links.outer[index]!;
+  return outer === Infinity ? 0 : 1 / (links.inner[index]! + outer / slope);
 }
 
 /**

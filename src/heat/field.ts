@@ -130,10 +130,12 @@ function endHeat(
   if (model[which].kind === 'insulated') return 0;
   const links = conduction[which];
   const row = which === 'front' ? 0 : (grid.nz - 1) * grid.nRadial;
+  // Differences of rises, not of temperatures, keep the digits of a small heat.
+  const air = boundary[which] - boundary.side;
   let heat = 0;
   for (let i = 0; i < grid.nr; i++) {
     if (law.exponent !== 0) heat += linkFlux(law, links, i, base + rise[row + i]!, boundary[which]);
-    else heat += (boundary.side + rise[row + i]! - boundary[which]) / (links.inner[i]! + links.outer[i]!);
+    else heat += (rise[row + i]! - air) / (links.inner[i]! + links.outer[i]!);
   }
   return heat;
 }

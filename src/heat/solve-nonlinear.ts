@@ -32,8 +32,15 @@ export function linkFlux(
     if (!Number.isFinite(change)) break;
   }
   if (Number.isFinite(flux)) return flux;
-  throw new NumericalError('heat through a surface with temperature-dependent conductivity', flux, index);
+  throw new NumericalError(
+    'surface of a rod whose conductivity falls too fast to carry its heat',
+    flux,
+    index,
+  );
 }
+
+/** Temperatures near 300 K carry no more digits than this, K. */
+const roundingOfTemperature = 2e-12;
 
 /** Surface slopes in use and the factor that belongs to them. */
 interface Linearisation {
@@ -77,8 +84,8 @@ export function solveNonlinear(
     }
     rise = next;
     if (!(change < Infinity)) break;
-    // Every further change is at least four times smaller: what is left is below 1e-12 of the rise.
-    if (change <= 4e-12 * largest) return rise;
+    // Every further change is at least four times smaller: what is left is below 1e-12 of the rise, or of rounding size.
+    if (change <= Math.max(4e-12 * largest, roundingOfTemperature)) return rise;
     const slopes = surfaceSlopes(conduction, boundary, base, rise);
     if (hasMoved(slopes, line)) {
       line = { factor: factorWith(conduction.model, grid, conduction, slopes), ...slopes };
@@ -150,6 +157,8 @@ function surfaceSlopes(
   const { grid, law, side, front, back } = conduction;
   const { nr, nz, nRadial, nMount } = grid;
   const slopeAt = (links: Links, k: number, p: number, beyond: number) => {
+    // Insulated and fixed surfaces are linear in the potential whatever their slope.
+    if (links.outer[k] === Infinity || links.outer[k] === 0) return 1;
     const flux = linkFlux(law, links, k, base + rise[p]!, beyond);
     return temperatureSlope(law, temperatureOf(law, base + rise[p]! - links.inner[k]! * flux));
   };

@@ -33,7 +33,36 @@ function solveLinear(
   heatPerCell: Float64Array,
   boundary: BoundaryTemperatures,
 ): Float64Array {
-  return solveBanded(conduction.factor, drive(conduction, heatPerCell, boundary));
+  const right = drive(conduction, heatPerCell, boundary);
+  const rise = solveBanded(conduction.factor, Float64Array.from(right));
+  return closeBalance(conduction, right, rise);
+}
+
+/**
+ * One correction of the level of all temperatures alike, by what rounding leaves between heat set free and heat let out.
+ * It matters where a body conducts well and its cooling is weak: then the level is what a direct solve knows least well.
+ */
+function closeBalance(conduction: RodConduction, right: Float64Array, rise: Float64Array): Float64Array {
+  const { grid, side, front, back, mountOut } = conduction;
+  const { nr, nz, nRadial } = grid;
+  const last = (nz - 1) * nRadial;
+  let missing = 0;
+  let conductance = 0;
+  for (let p = 0; p < right.length; p++) missing += right[p]!;
+  for (let j = 0; j < nz; j++) {
+    const out = mountOut === null ? 1 / (side.inner[j]! + side.outer[j]!) : mountOut[j]!;
+    missing -= out * rise[j * nRadial + nRadial - 1]!;
+    conductance += out;
+  }
+  for (let i = 0; i < nr; i++) {
+    const ahead = 1 / (front.inner[i]! + front.outer[i]!);
+    const behind = 1 / (back.inner[i]! + back.outer[i]!);
+    missing -= ahead * rise[i]! + behind * rise[last + i]!;
+    conductance += ahead + behind;
+  }
+  const level = missing / conductance;
+  for (let p = 0; p < rise.length; p++) rise[p] = rise[p]! + level;
+  return rise;
 }
 
 /** Right-hand side for the rise above the base: heat, and what the air at the ends brings in, W, length nRadial*nz. */
