@@ -84,6 +84,12 @@ function heatModel({ rod, mount }: ResolvedDesign): RodHeatModel {
   };
 }
 
+/** Scales the shares of one plane to a given sum. */
+function evenOut(row: Float64Array, total: number): void {
+  const sum = row.reduce((all, share) => all + share, 0);
+  if (sum > 0 && sum !== total) for (let i = 0; i < row.length; i++) row[i] = (row[i]! * total) / sum;
+}
+
 function spreadOf(resolved: ResolvedDesign, grid: RodGrid, beam: FocusedBeam): PumpSpread {
   const { pump, rod } = resolved;
   const radii = pump.beamQuality === null ? pump.radius : beamRadii(grid.axialFaces, beam);
@@ -93,6 +99,9 @@ function spreadOf(resolved: ResolvedDesign, grid: RodGrid, beam: FocusedBeam): P
   const row =
     heatShares.length > grid.nr ? heatShares.subarray(middle * grid.nr, (middle + 1) * grid.nr) : heatShares;
   const inside = row.reduce((sum, share) => sum + share, 0);
+  // A diverging beam is clipped once, not anew in every plane: all rows carry the light of the middle one.
+  for (let from = 0; from < heatShares.length; from += grid.nr)
+    evenOut(heatShares.subarray(from, from + grid.nr), inside);
   return {
     heatShares,
     overlapFaces: finer,

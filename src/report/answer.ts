@@ -56,6 +56,23 @@ export function edgeOf(
 /** A design without pump power is answered a hair above none, where every share is still defined. */
 const askedPower = ({ pump }: ResolvedDesign) => Math.max(pump.power, 1e-6 * pump.searchTo);
 
+/** Marks an operating point where the loop has a second steady state. */
+function withStates(bench: OptionBench, report: Report['operating']): Report['operating'] {
+  if (report.state !== 'steady') return report;
+  const bases = steadyBases(bench.prepared, {
+    pumpPower: report.pumpPower,
+    cooler: bench.cooler,
+    beam: 'lasing',
+  });
+  if (bases.length < 2) return report;
+  const words = bases.map((base) => `${(base - 273.15).toFixed(1)} degC`).join(' and ');
+  return {
+    ...report,
+    state: 'two',
+    reason: `steady states with the base at ${words}; which one the laser settles in depends on where it comes from`,
+  };
+}
+
 function optionReport(
   bench: OptionBench,
   result: CeilingResult,
@@ -63,15 +80,16 @@ function optionReport(
   band: BandResult | null,
 ): OptionReport {
   const { lasing, margins } = bench.at(asked);
+  const point = withStates(bench, lasing.point);
   const { cooler } = bench;
   const ends = band?.ceilings.get(cooler.id);
   return {
     id: cooler.id,
     kind: cooler.kind,
     label: cooler.label,
-    state: lasing.point.state,
-    ...(lasing.point.reason ? { reason: lasing.point.reason } : {}),
-    electricalPower: lasing.point.electricalPower,
+    state: point.state,
+    ...(point.reason ? { reason: point.reason } : {}),
+    electricalPower: point.electricalPower,
     passes: margins.every((margin) => margin.holds),
     margins,
     ceiling: {
@@ -97,23 +115,6 @@ function edgeReport({ edge, zones }: Findings, band: BandResult | null): Report[
   };
 }
 
-/** Marks the design's operating point where the loop has a second steady state. */
-function withStates(
-  prepared: PreparedDesign,
-  bench: OptionBench,
-  report: Report['operating'],
-): Report['operating'] {
-  if (report.state !== 'steady') return report;
-  const bases = steadyBases(prepared, { pumpPower: report.pumpPower, cooler: bench.cooler, beam: 'lasing' });
-  if (bases.length < 2) return report;
-  const words = bases.map((base) => `${(base - 273.15).toFixed(1)} degC`).join(' and ');
-  return {
-    ...report,
-    state: 'two',
-    reason: `steady states with the base at ${words}; which one the laser settles in depends on where it comes from`,
-  };
-}
-
 function assemble(findings: Findings, band: BandResult | null): Answer {
   const { resolved, prepared, benches, chosen, ceilings, edge } = findings;
   const asked = askedPower(resolved);
@@ -131,13 +132,15 @@ function assemble(findings: Findings, band: BandResult | null): Answer {
     option,
   }));
   const cavityEdge = edgeReport(findings, band);
-  const operating = withStates(prepared, chosen, level.lasing.point);
+  const operating = withStates(chosen, level.lasing.point);
+  const usableWindow = edge.windows.map(({ from, to: end }) => ({ fromPumpPower: from, toPumpPower: end }));
   const parts = {
     options,
     chosenCooler: resolved.chosenCooler,
     cavityEdge,
     ladder,
     bandComplete: band !== null,
+    usableWindow,
     pumpPower: resolved.pump.power,
     bin: binAdvice(resolved, options, prepared.caseWindow.best),
   };
@@ -153,7 +156,7 @@ function assemble(findings: Findings, band: BandResult | null): Answer {
     options,
     ladder,
     cavityEdge,
-    usableWindow: edge.windows.map(({ from, to: end }) => ({ fromPumpPower: from, toPumpPower: end })),
+    usableWindow,
     mounts: ranked(findings.mounts),
     levers: band?.levers ?? [],
     contributors: {

@@ -24,7 +24,7 @@ export function binAdvice(
   options: readonly OptionReport[],
   best: number | null,
 ): BinAdvice | null {
-  if (best === null || pump.drift === 0 || diode.caseTemperature !== null) return null;
+  if (best === null || pump.power === 0 || pump.drift === 0 || diode.caseTemperature !== null) return null;
   const marginOf = (option: OptionReport, limit: string) =>
     option.margins.find((margin) => margin.limit === limit);
   const demandOf = (option: OptionReport) =>

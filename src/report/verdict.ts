@@ -3,7 +3,10 @@ import type { OptionReport, Report } from './types';
 
 const watts = (value: number) => `${Number(value.toPrecision(3))} W`;
 
-type Parts = Pick<Report, 'options' | 'chosenCooler' | 'cavityEdge' | 'ladder' | 'bandComplete'> & {
+type Parts = Pick<
+  Report,
+  'options' | 'chosenCooler' | 'cavityEdge' | 'ladder' | 'usableWindow' | 'bandComplete'
+> & {
   pumpPower: number;
   /** Another bin of the diode, where that would do away with a TEC. */
   bin: BinAdvice | null;
@@ -23,6 +26,7 @@ function ceilingWords({ ceiling, label, windows }: OptionReport): string {
 }
 
 function standing(option: OptionReport, pumpPower: number): string {
+  if (pumpPower === 0) return 'The design asks for no pump power yet.';
   const power = watts(pumpPower);
   const broken = option.margins.filter((margin) => !margin.holds).map((margin) => margin.limit);
   const { low, high } = option.ceiling;
@@ -42,7 +46,9 @@ function standing(option: OptionReport, pumpPower: number): string {
   return `${power} breaks ${broken.join(', ')}${chance}.`;
 }
 
-function remedy({ options, ladder, pumpPower, chosenCooler }: Parts): string {
+function remedy({ options, ladder, usableWindow, pumpPower, chosenCooler }: Parts): string {
+  if (usableWindow.length === 0)
+    return 'The cavity holds no mode at any pump power in the range: its mirrors or spaces have to change first.';
   const step = ladder.find((item) => item.fromPumpPower <= pumpPower && pumpPower <= item.toPumpPower);
   const best = step?.option ?? null;
   if (best !== null) {
@@ -63,13 +69,13 @@ function remedy({ options, ladder, pumpPower, chosenCooler }: Parts): string {
 }
 
 /**
- * The answer in a few sentences: the ceiling with the chosen cooler, its band and limit; whether the design's
- * pump power holds; which cooling is the least that does; and whether another
- * bin of the diode would serve better.
+ * The answer in a few sentences: the ceiling with the chosen cooler, its band and limit; whether the design's pump power
+ * holds; which cooling is the least that does; and whether another bin of the diode would serve better.
  */
 export function verdictOf(parts: Parts): Report['verdict'] {
   const option = parts.options.find((item) => item.id === parts.chosenCooler)!;
-  const words = [ceilingWords(option), standing(option, parts.pumpPower), remedy(parts)];
+  const words = [ceilingWords(option), standing(option, parts.pumpPower)];
+  if (parts.pumpPower > 0) words.push(remedy(parts));
   if (parts.bin) words.push(binSentence(parts.bin));
   const text = words.join(' ');
   return { text, holds: option.passes };

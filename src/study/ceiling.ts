@@ -26,6 +26,9 @@ const usualLevels = [1, 2, 4, 6, 9, 12, 16, 20, 25, 30, 36, 43, 51, 60];
 /** Crossings are found to this share of the searched range. */
 const precision = 2e-5;
 
+/** Further levels below the first, looked at only where the usual ones find no power that keeps every limit. */
+const lowLevels = [0.005, 0.02, 0.11, 0.33];
+
 function scanPowers(to: number, extra: readonly number[], levels: readonly number[]): number[] {
   const even = levels.map((level) => (to * level) / 60);
   const near = extra.flatMap((power) => [power * 0.997, power * 1.003]);
@@ -100,6 +103,24 @@ function blockerOf(names: LimitName[], seen: Margin[][]): LimitName | null {
   return worst;
 }
 
+interface Look {
+  names: LimitName[];
+  seen: Margin[][];
+  crossings: Crossing[];
+  windows: ReturnType<typeof windowsOf>;
+}
+
+/** Everything that is found from one set of levels. */
+function look(at: MarginsAt, to: number, extra: readonly number[], levels: readonly number[]): Look {
+  const powers = withTurns(scanPowers(to, extra, levels), at);
+  const seen = powers.map(at);
+  const names = [...new Set(seen.flatMap((margins) => margins.map((margin) => margin.limit)))];
+  const crossings = names
+    .flatMap((limit) => crossingsOf(limit, powers, at, seen))
+    .sort((a, b) => a.power - b.power);
+  return { names, seen, crossings, windows: windowsOf(names, seen[0]!, crossings, to) };
+}
+
 /**
  * The pump ceiling of one way of cooling: looks along the pump-power axis, brackets every place where a limit is
  * broken or regained, and joins them to the intervals over which all hold. The ceiling is the end of the first.
@@ -116,13 +137,9 @@ export function ceilingOf(
   extra: readonly number[] = [],
   levels: readonly number[] = usualLevels,
 ): CeilingResult {
-  const powers = withTurns(scanPowers(to, extra, levels), at);
-  const seen = powers.map(at);
-  const names = [...new Set(seen.flatMap((margins) => margins.map((margin) => margin.limit)))];
-  const crossings = names
-    .flatMap((limit) => crossingsOf(limit, powers, at, seen))
-    .sort((a, b) => a.power - b.power);
-  const windows = windowsOf(names, seen[0]!, crossings, to);
+  let found = look(at, to, extra, levels);
+  if (found.windows.length === 0) found = look(at, to, extra, [...lowLevels, ...levels]);
+  const { names, seen, crossings, windows } = found;
   const first = windows[0];
   const limits = names.map((limit) => {
     const cross = crossings.find((item) => item.limit === limit && item.breaks);
