@@ -53,7 +53,7 @@ test('a bare number is refused beside its field, the last good answer stays, and
   await field.fill('18');
   await expect(field).toHaveAttribute('aria-invalid', 'true');
   await expect(page.locator('#field-pump-power-fault')).toContainText(/unit/);
-  await expect(page.getByText('This is the answer to the last good design')).toBeVisible();
+  await expect(page.getByText('This is the answer to the last good design.')).toBeVisible();
   await expect(headline(page)).toHaveText(before ?? '');
   await field.blur();
   await expect(field).toHaveValue('18');

@@ -6,6 +6,14 @@ export interface RodReader {
   depths: Float64Array;
   /** Temperature at (r, z), r of either sign. */
   at: (r: number, z: number) => number;
+  /** Temperatures along a line of constant r, at many depths whose places were found once. */
+  row: (r: number, places: Places, out: Float64Array) => void;
+}
+
+/** Between which cells some depths lie, and how far towards the further one. */
+export interface Places {
+  index: Int32Array;
+  share: Float64Array;
 }
 
 const centres = (faces: Float64Array) =>
@@ -28,6 +36,11 @@ const shareBetween = (places: Float64Array, index: number, value: number) => {
   return width > 0 ? Math.min(1, Math.max(0, (value - places[index]!) / width)) : 0;
 };
 
+export function placesOf(centres: Float64Array, wanted: Float64Array): Places {
+  const index = Int32Array.from(wanted, (value) => below(centres, value));
+  return { index, share: Float64Array.from(wanted, (value, at) => shareBetween(centres, index[at]!, value)) };
+}
+
 export function readRod(picture: RodPicture): RodReader {
   const radii = centres(picture.radialFaces);
   const depths = centres(picture.axialFaces);
@@ -43,5 +56,16 @@ export function readRod(picture: RodPicture): RodReader {
     const far = value(i, j + 1) * (1 - u) + value(i + 1, j + 1) * u;
     return near * (1 - v) + far * v;
   };
-  return { radii, depths, at };
+  const row = (r: number, { index, share }: Places, out: Float64Array) => {
+    const i = below(radii, Math.abs(r));
+    const u = shareBetween(radii, i, Math.abs(r));
+    for (let column = 0; column < out.length; column += 1) {
+      const j = index[column]!;
+      const v = share[column]!;
+      const near = value(i, j) * (1 - u) + value(i + 1, j) * u;
+      const far = value(i, j + 1) * (1 - u) + value(i + 1, j + 1) * u;
+      out[column] = near * (1 - v) + far * v;
+    }
+  };
+  return { radii, depths, at, row };
 }

@@ -2,7 +2,7 @@ import type { RodPicture } from '../../src/report/types';
 import { niceTicks } from '../state/pump-axis';
 import { heatTable } from './colour-map';
 import { isotherm } from './isotherms';
-import { readRod, type RodReader } from './rod-field';
+import { placesOf, readRod, type RodReader } from './rod-field';
 
 /** What part of the rod and its mount is looked at, and how it is scaled; z runs right, r up and down from the axis. */
 export interface RodView {
@@ -73,13 +73,16 @@ export function paintRod(
   const image = context.createImageData(columns, rows);
   const half = Math.ceil(rows / 2);
   const span = Math.max(1e-9, highest - lowest);
+  const depths = Float64Array.from({ length: columns }, (_, column) => view.zAt(column + 0.5));
+  const places = placesOf(view.reader.depths, depths);
+  const line = new Float64Array(columns);
   for (let row = 0; row < half; row += 1) {
-    const r = view.rAt(row + 0.5);
+    view.reader.row(view.rAt(row + 0.5), places, line);
     for (let column = 0; column < columns; column += 1) {
-      const share = (view.reader.at(r, view.zAt(column + 0.5)) - lowest) / span;
+      const share = (line[column]! - lowest) / span;
       const entry = 3 * Math.min(255, Math.max(0, Math.round(255 * share)));
-      for (const line of [row, rows - 1 - row]) {
-        const at = 4 * (line * columns + column);
+      for (const mirrored of [row, rows - 1 - row]) {
+        const at = 4 * (mirrored * columns + column);
         image.data[at] = table[entry]!;
         image.data[at + 1] = table[entry + 1]!;
         image.data[at + 2] = table[entry + 2]!;

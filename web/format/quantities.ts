@@ -28,6 +28,7 @@ export function power(value: Given, digits = 3): string {
 }
 
 export function length(value: Given, digits = 3): string {
+  if (value === 0) return `0${gap}mm`;
   return prefixed(
     value,
     'm',

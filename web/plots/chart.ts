@@ -1,4 +1,5 @@
 import uPlot from 'uplot';
+import { SeenWork } from '../state/idle-work';
 
 /** One line of a chart. */
 export interface Line {
@@ -135,6 +136,7 @@ interface ChartOrder {
 export class ChartHandle {
   private readonly chart: uPlot;
   private readonly watcher: ResizeObserver;
+  private readonly work: SeenWork;
   private dressing: Dressing = { marks: [] };
 
   constructor(
@@ -146,11 +148,14 @@ export class ChartHandle {
     this.chart = new uPlot(this.options(width()), [[], ...none], box);
     this.watcher = new ResizeObserver(() => this.chart.setSize({ width: width(), height: order.height }));
     this.watcher.observe(box);
+    this.work = new SeenWork(box);
   }
 
   show(x: ArrayLike<number>, lines: Line[], dressing: Dressing): void {
-    this.dressing = dressing;
-    this.chart.setData([Array.from(x), ...lines.map((line) => Array.from(line.values))]);
+    this.work.do(() => {
+      this.dressing = dressing;
+      this.chart.setData([Array.from(x), ...lines.map((line) => Array.from(line.values))]);
+    });
   }
 
   /** Puts the cursor on a point, in every chart of the group; null takes it away. */
@@ -166,6 +171,7 @@ export class ChartHandle {
   }
 
   destroy(): void {
+    this.work.end();
     this.watcher.disconnect();
     this.chart.destroy();
   }

@@ -64,7 +64,7 @@ function chartsOf(points: SweepPoint[], report: Report, place: (pumpPower: numbe
     dash?: number[],
   ): Line => ({
     name,
-    values: points.map((point) => finite(value(point))),
+    values: points.map((point) => (point.state === 'none' ? null : finite(value(point)))),
     colour,
     write,
     dash,

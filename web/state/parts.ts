@@ -1,4 +1,5 @@
 import type { CoolerDesign, Design, ElementDesign } from '../../src/design/schema';
+import { convertTo, parseQuantity } from '../../src/quantity';
 
 /** Parts of a design that can be added and taken away: cavity elements and coolers. */
 export type ElementKind = 'space' | 'mirror' | 'lens' | 'plate' | 'rod';
@@ -32,6 +33,32 @@ export function withNewElement(
 ): Design {
   const { elements } = design.cavity;
   return withElements(design, [...elements.slice(0, place), element, ...elements.slice(place)]);
+}
+
+/** Half of a space, in the unit it was written in. */
+function halved(space: string): string {
+  const read = parseQuantity(space, 'length');
+  return read.ok
+    ? `${Number((convertTo(read.value, read.unit, 'length') / 2).toPrecision(6))} ${read.unit}`
+    : space;
+}
+
+/**
+ * A new element where there is room for it: in the middle of the space before `place`, or just before `place` where
+ * there is none.
+ */
+export function withElementInside(design: Design, place: number, kind: ElementKind): Design {
+  const { elements } = design.cavity;
+  const space = elements[place - 1]?.space;
+  if (space === undefined || kind === 'space') return withNewElement(design, place, kind);
+  const half = { space: halved(space) };
+  return withElements(design, [
+    ...elements.slice(0, place - 1),
+    half,
+    newElement[kind],
+    half,
+    ...elements.slice(place),
+  ]);
 }
 
 export function withoutElement(design: Design, place: number): Design {

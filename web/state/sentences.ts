@@ -25,6 +25,14 @@ export function windowSentence(report: Report): string {
   return `Usable window: ${spans.join(', and ')}.`;
 }
 
+/** Said before everything else where the numbers are not those of a steady state. */
+function unsteady({ state, reason, pumpPower }: Report['operating']): string {
+  if (state === 'steady') return '';
+  const why = reason ? `: ${reason}` : '';
+  if (state === 'two') return `Two steady states at ${power(pumpPower)}${why}. `;
+  return `No steady state at ${power(pumpPower)}${why}; the numbers are those of the last point tried. `;
+}
+
 export function rodSentence(report: Report): string {
   const { rod, heatLoad } = report.operating;
   const deep = rod.peakPosition.z > 5e-5;
@@ -34,7 +42,7 @@ export function rodSentence(report: Report): string {
     Math.abs(hotter) < 0.05
       ? 'Blocking the beam changes that by less than 0.1 K.'
       : `With the beam blocked it is ${rise(Math.abs(hotter))} ${hotter > 0 ? 'hotter' : 'cooler'}.`;
-  return `${power(heatLoad)} of heat make ${temperature(rod.peakTemperature)} at the hottest place, ${place}. ${blocked}`;
+  return `${unsteady(report.operating)}${power(heatLoad)} of heat make ${temperature(rod.peakTemperature)} at the hottest place, ${place}. ${blocked}`;
 }
 
 const spreadOf = (values: number[]) => Math.max(...values) - Math.min(...values);
@@ -54,5 +62,5 @@ export function ledgerSentence(report: Report): string {
   const { electricalPower, outputPower, diode, heatLoad } = report.operating;
   const ratio =
     heatLoad > 0 ? ` The diode makes ${(diode.heat / heatLoad).toFixed(1)} times the heat of the rod.` : '';
-  return `${power(electricalPower)} from the wall give ${power(outputPower)} of laser light; ${power(diode.heat)} of heat come from the diode and ${power(heatLoad)} from the rod.${ratio}`;
+  return `${unsteady(report.operating)}${power(electricalPower)} from the wall give ${power(outputPower)} of laser light; ${power(diode.heat)} of heat come from the diode and ${power(heatLoad)} from the rod.${ratio}`;
 }
