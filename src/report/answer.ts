@@ -188,7 +188,7 @@ function* find(design: Design): Generator<Step, Findings> {
     ceilings.push(bench.ceiling(edge.crossings));
   }
   const mounts: MountComparison[] = [];
-  for (const mount of compareMounts(chosen, edge.crossings)) {
+  for (const mount of compareMounts(chosen, ceilings[benches.indexOf(chosen)]!, edge.crossings)) {
     mounts.push(mount);
     yield progress(0.5 + 0.04 * mounts.length, 'mount comparison');
   }

@@ -1,7 +1,10 @@
 import { findMountMaterial, type MountMaterial } from '../materials';
 import type { ResolvedDesign } from '../design/resolved';
 import type { LimitName } from '../limits/types';
-import { prepareDesign, type PreparedDesign } from '../operating/prepare';
+import { worstOf } from '../limits/margins';
+import { prepareDesign } from '../operating/prepare';
+import type { CeilingResult } from './ceiling';
+import { followCeiling } from './follow-ceiling';
 import { OptionBench } from './option-bench';
 
 /** Mounts that a workshop can get, from the best conductor to the worst. */
@@ -15,9 +18,6 @@ export const comparedMounts = [
   'brass',
   'stainless steel 304',
 ] as const;
-
-/** Powers looked at for each mount; the limits are those of the design itself, only moved a little. */
-const mountLevels = [4, 10, 18, 28, 40, 60];
 
 export interface MountComparison {
   material: string;
@@ -50,21 +50,22 @@ function withMount(resolved: ResolvedDesign, material: MountMaterial): ResolvedD
   };
 }
 
-function compare(
-  resolved: ResolvedDesign,
-  current: boolean,
-  edges: readonly number[],
-  like: PreparedDesign,
-  known?: OptionBench,
-): MountComparison {
-  const { mount, rod, pump } = resolved;
-  const bench =
-    known ??
-    new OptionBench(
-      prepareDesign(resolved, 'standard', like),
-      resolved.coolers.find((item) => item.id === resolved.chosenCooler)!,
-    );
-  const { pumpPower, setBy } = bench.ceiling(edges, known ? undefined : mountLevels);
+type Ceiling = Pick<CeilingResult, 'pumpPower' | 'setBy'>;
+
+/** The ceiling of a design that differs in its mount alone, found from the ceiling of the design as it stands. */
+function ceilingNear(bench: OptionBench, known: Ceiling, edges: readonly number[]): Ceiling {
+  if (known.pumpPower === null) return bench.ceiling(edges);
+  const to = bench.prepared.resolved.pump.searchTo;
+  const at = (power: number) => bench.at(power).margins;
+  const pumpPower = followCeiling(at, known.pumpPower, to, 1e-5);
+  if (pumpPower === null) return bench.ceiling(edges);
+  const beyond = at(Math.min(pumpPower * 1.001, to));
+  const worst = worstOf(beyond);
+  return { pumpPower, setBy: worst.holds ? null : worst.limit };
+}
+
+function compare(bench: OptionBench, current: boolean, { pumpPower, setBy }: Ceiling): MountComparison {
+  const { mount, rod, pump } = bench.prepared.resolved;
   const { point } = bench.lasing(Math.max(pump.power, 1e-6 * pump.searchTo));
   const length = rod.frontCap + rod.dopedLength + rod.backCap;
   return {
@@ -84,15 +85,24 @@ function compare(
 /**
  * The same design in every mount material, with the design's chosen cooler; one material at a time.
  * @param bench of the design as it stands
+ * @param known its ceiling
  * @param edges powers near which the cavity gains or loses stability, W
  */
-export function* compareMounts(bench: OptionBench, edges: readonly number[]): Generator<MountComparison> {
-  const { resolved } = bench.prepared;
-  yield compare(resolved, true, edges, bench.prepared, bench);
+export function* compareMounts(
+  bench: OptionBench,
+  known: Ceiling,
+  edges: readonly number[],
+): Generator<MountComparison> {
+  const { prepared, cooler } = bench;
+  yield compare(bench, true, known);
   for (const name of comparedMounts) {
     const material = findMountMaterial(name)!;
-    if (material.name === resolved.mount.name) continue;
-    yield compare(withMount(resolved, material), false, edges, bench.prepared);
+    if (material.name === prepared.resolved.mount.name) continue;
+    const other = new OptionBench(
+      prepareDesign(withMount(prepared.resolved, material), 'standard', prepared),
+      cooler,
+    );
+    yield compare(other, false, ceilingNear(other, known, edges));
   }
 }
 
