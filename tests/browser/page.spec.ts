@@ -105,6 +105,62 @@ test('the end mirror moves with the arrow keys and its space follows', async ({ 
   await expect(space).toHaveValue('95 mm');
 });
 
+test('reading one chart with the arrow keys reads all charts of the sweep at the same pump power', async ({
+  page,
+}) => {
+  await open(page);
+  await page.getByRole('slider', { name: /^Peak temperature/ }).focus();
+  await page.keyboard.press('Home');
+  await page.keyboard.press('Shift+ArrowRight');
+  const readings = await page
+    .locator('#sweeps [role=slider]')
+    .evaluateAll((charts) => charts.map((chart) => chart.getAttribute('aria-valuenow')));
+  expect(new Set(readings)).toEqual(new Set(['10']));
+});
+
+test('choosing a way of cooling and a mount changes the design', async ({ page }) => {
+  await open(page);
+  await page.getByRole('button', { name: /^water/ }).click();
+  await expect(page.locator('.headline .label')).toContainText(/water/i, { timeout: patience });
+  await page.locator('#mount').getByRole('button', { name: /brass/ }).click();
+  await expect(page.getByLabel('Mount material')).toHaveValue(/brass/);
+});
+
+test('the rod section is read with the arrow keys, and the beam can be blocked', async ({ page }) => {
+  await open(page);
+  const section = page.getByRole('slider', { name: /Temperature over the section/ });
+  await section.focus();
+  const before = await section.getAttribute('aria-valuetext');
+  await page.keyboard.press('Shift+ArrowRight');
+  await expect(section).not.toHaveAttribute('aria-valuetext', before ?? '');
+  await page.getByRole('button', { name: 'beam blocked' }).click();
+  await expect(page.getByRole('button', { name: 'beam blocked' })).toHaveAttribute('aria-pressed', 'true');
+});
+
+test('the theme can be chosen against that of the system', async ({ page }) => {
+  await page.emulateMedia({ colorScheme: 'light' });
+  await open(page);
+  await page.getByRole('button', { name: 'Dark page' }).click();
+  await expect(page.locator('html')).toHaveAttribute('data-theme', 'dark');
+  await page.reload();
+  await expect(page.locator('html')).toHaveAttribute('data-theme', 'dark');
+});
+
+test('parts of the cavity and coolers can be added and taken away, and undone', async ({ page }) => {
+  await open(page);
+  await page.getByText('Cavity elements').click();
+  await page.locator('#cavity').getByRole('button', { name: 'lens', exact: true }).click();
+  await expect(page.getByRole('textbox', { name: 'Focal length' })).toHaveValue('200 mm');
+  await page.getByRole('button', { name: 'Undo add lens' }).click();
+  await expect(page.getByRole('textbox', { name: 'Focal length' })).toHaveCount(0);
+  await page.getByText('ways of cooling, their sizes').click();
+  await page.getByRole('button', { name: 'plain K/W' }).click();
+  await expect(page.getByRole('group', { name: /Ceiling of every way/ }).locator('.word.main')).toHaveCount(
+    7,
+    { timeout: patience },
+  );
+});
+
 test('a worker that dies is started again and the page says so', async ({ page }) => {
   await open(page, '/?test=1');
   await page.getByLabel('Pump radius', { exact: true }).fill('280 um');

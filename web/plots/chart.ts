@@ -132,6 +132,9 @@ interface ChartOrder {
   pointed: (index: number | null) => void;
 }
 
+/** Charts that share their cursor, by the key they share. */
+const groups = new Map<string, Set<ChartHandle>>();
+
 /** A chart in its box: made once per list of lines, then fed with new numbers; it follows the width of the box. */
 export class ChartHandle {
   private readonly chart: uPlot;
@@ -149,6 +152,7 @@ export class ChartHandle {
     this.watcher = new ResizeObserver(() => this.chart.setSize({ width: width(), height: order.height }));
     this.watcher.observe(box);
     this.work = new SeenWork(box);
+    if (order.sync) groups.set(order.sync, (groups.get(order.sync) ?? new Set<ChartHandle>()).add(this));
   }
 
   show(x: ArrayLike<number>, lines: Line[], dressing: Dressing): void {
@@ -160,17 +164,17 @@ export class ChartHandle {
 
   /** Puts the cursor on a point, in every chart of the group; null takes it away. */
   point(index: number | null): void {
-    const { chart } = this;
-    const left = index === null ? -10 : chart.valToPos(chart.data[0][index] ?? 0, 'x');
-    chart.setCursor({ left, top: index === null ? -10 : 1 });
-    const { width, height } = chart.over.getBoundingClientRect();
-    if (this.order.sync)
-      uPlot
-        .sync(this.order.sync)
-        .pub('mousemove', chart, left, index === null ? -10 : 1, width, height, index ?? 0);
+    const group = this.order.sync ? (groups.get(this.order.sync) ?? []) : [this];
+    for (const member of group) member.mark(index);
+  }
+
+  private mark(index: number | null): void {
+    const left = index === null ? -10 : this.chart.valToPos(this.chart.data[0][index] ?? 0, 'x');
+    this.chart.setCursor({ left, top: index === null ? -10 : 1 });
   }
 
   destroy(): void {
+    if (this.order.sync) groups.get(this.order.sync)?.delete(this);
     this.work.end();
     this.watcher.disconnect();
     this.chart.destroy();
