@@ -103,7 +103,7 @@ export function raisedWords(nodes: FlowNode[]): Map<string, number> {
     const half = ((node.name.length + 7) * characterWidth) / 2;
     const middle = (node.from + node.to) / 2;
     const lanes = ends.get(node.column) ?? [];
-    const lane = [0, 1, 2].find((line) => (lanes[line] ?? -Infinity) < middle - half) ?? 2;
+    const lane = [0, 1, 2, 3].find((line) => (lanes[line] ?? -Infinity) < middle - half) ?? 3;
     lanes[lane] = middle + half;
     ends.set(node.column, lanes);
     lifts.set(node.name, 13 * lane);

@@ -1,4 +1,4 @@
-import { createContext } from 'svelte';
+import { createContext, flushSync } from 'svelte';
 
 export type Theme = 'light' | 'dark';
 const storageKey = 'pump-ceiling/theme';
@@ -16,7 +16,9 @@ function remembered(): Theme | null {
 export class View {
   private system = $state<Theme>('light');
   private chosen = $state<Theme | null>(remembered());
-  theme = $derived<Theme>(this.chosen ?? this.system);
+  private printing = $state(false);
+  /** Paper is white whatever the screen is. */
+  theme = $derived<Theme>(this.printing ? 'light' : (this.chosen ?? this.system));
 
   /** Which state the rod section shows. */
   beam = $state<'lasing' | 'blocked'>('lasing');
@@ -34,6 +36,14 @@ export class View {
       this.apply();
     });
     this.apply();
+    addEventListener('beforeprint', () => this.print(true));
+    addEventListener('afterprint', () => this.print(false));
+  }
+
+  private print(printing: boolean): void {
+    this.printing = printing;
+    this.apply();
+    flushSync();
   }
 
   /** At once, since drawings on canvas read their colours from the page. */
