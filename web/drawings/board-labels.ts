@@ -15,7 +15,7 @@ export interface LaneLabel {
 const characterWidth = 6.1;
 
 /** What is written at the end of a bar. */
-export function ceilingWords(option: OptionReport): string {
+function ceilingWords(option: OptionReport): string {
   const { ceiling } = option;
   if (ceiling.pumpPower === null)
     return `none at any power: ${ceiling.setBy ?? option.reason ?? 'no steady state'}`;

@@ -12,7 +12,8 @@ export interface PartShape {
   short: string;
   textX: number;
   anchor: 'start' | 'middle' | 'end';
-  line?: number;
+  /** How far below the axis the words stand, drawing units; lenses have theirs above. */
+  textY: number;
 }
 
 const half = 68;
@@ -48,7 +49,7 @@ export function partShape(design: Design, part: Placed, scale: CavityScale, midd
   const last = part.place === count - 1;
   const anchor = first ? 'start' : last ? 'end' : 'middle';
   const textX = first ? from - 20 : last ? from + 20 : (from + to) / 2;
-  const at = { textX, anchor } as const;
+  const at = { textX, anchor, textY: half + 28 } as const;
   if (element.mirror) {
     const { radius } = element.mirror;
     const flat = radius.trim().toLowerCase() === 'flat';
@@ -71,7 +72,7 @@ export function partShape(design: Design, part: Placed, scale: CavityScale, midd
       name: 'lens',
       label: `Lens, focal length ${element.lens}`,
       short: `f ${element.lens}`,
-      line: 1,
+      textY: -half - 8,
     };
   if (element.plate)
     return {
@@ -80,7 +81,7 @@ export function partShape(design: Design, part: Placed, scale: CavityScale, midd
       name: 'plate',
       label: `Plate, ${element.plate.thickness}`,
       short: 'plate',
-      line: 1,
+      textY: half + 42,
     };
   return {
     ...at,
@@ -88,6 +89,6 @@ export function partShape(design: Design, part: Placed, scale: CavityScale, midd
     name: 'rod',
     label: `Rod, ${design.rod.crystal}, ${design.rod.length}`,
     short: design.rod.crystal,
-    line: first ? 0 : 1,
+    textY: first ? half + 28 : half + 42,
   };
 }

@@ -14,7 +14,7 @@ export interface Line {
 }
 
 /** A place on the horizontal axis worth marking. */
-export interface Mark {
+interface Mark {
   x: number;
   colour: string;
   dash?: number[];

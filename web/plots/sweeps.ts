@@ -4,7 +4,7 @@ import { lensPower, power, stability, temperature } from '../format/quantities';
 import type { Dressing, Line } from './chart';
 
 /** One of the small charts over pump power. */
-export interface SweepChart {
+interface SweepChart {
   name: string;
   summary: string;
   lines: Line[];

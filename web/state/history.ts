@@ -1,5 +1,5 @@
 /** One state a person can return to, with the name of the step that led to it. */
-export interface Step<T> {
+interface Step<T> {
   state: T;
   name: string;
   /** Steps with the same key in quick succession count as one: a drag, a word being typed. */

@@ -9,6 +9,7 @@ export function cavitySentence(report: Report): string {
   const now = report.operating.cavity;
   const stableNow = now.sagittal.stable && now.tangential.stable;
   const state = `At ${power(report.operating.pumpPower)} the cavity is ${stableNow ? 'stable' : 'not stable'}`;
+  if (report.usableWindow.length === 0) return `${state}.`;
   if (pumpPower === null) return `${state}; no edge was found up to ${power(report.searchedTo)}.`;
   const range = band(low, high);
   const where = plane === 'both' || plane === null ? 'both planes' : `the ${plane} plane`;
