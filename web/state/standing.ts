@@ -10,7 +10,7 @@ export interface Standing {
 
 /**
  * @param pumpPower operating pump power, W
- * @returns "holds, not assured" where the low end of the band lies below the operating pump power
+ * @returns "not assured" where the low end of the band lies below the operating pump power
  */
 export function standingOf(option: OptionReport, pumpPower: number): Standing {
   if (!option.passes) return { shape: '✕', words: 'fails', holds: false };
@@ -18,5 +18,5 @@ export function standingOf(option: OptionReport, pumpPower: number): Standing {
   const assured = low === null || reachesRange || low >= pumpPower;
   return assured
     ? { shape: '●', words: 'holds', holds: true }
-    : { shape: '◐', words: 'holds, not assured,', holds: true };
+    : { shape: '◐', words: 'not assured', holds: true };
 }
