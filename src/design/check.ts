@@ -6,6 +6,7 @@ import { issueFaults } from './issue-faults';
 import { designSchema, type Design } from './schema';
 import { isGroup, type AnySchema } from './schema-walk';
 import { shapeFaults } from './shape';
+import { expandShorthand } from './shorthand';
 import { longestDesign, sizeFault } from './size';
 import { versionFault } from './version';
 
@@ -55,7 +56,7 @@ export function checkDesign(input: unknown): Checked {
   }
   const early = sizeFault(input) ?? versionFault(input);
   if (early) return refuse([early]);
-  const read = schemaFaults(input);
+  const read = schemaFaults(expandShorthand(input));
   if ('faults' in read) return refuse(read.faults);
   const faults = consistencyFaults(read.design);
   return faults.length > 0 ? refuse(faults) : { ok: true, design: read.design };
