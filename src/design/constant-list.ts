@@ -80,6 +80,13 @@ export const constantList = {
     own: 'rod.values.thermalConductivityAxial',
     range: positive,
   },
+  'material.conductivityExponent': {
+    label: 'Fall of the conductivity, m of (300 K / T)^m',
+    dimension: 'dimensionless',
+    unit: '1',
+    own: 'rod.values.conductivityExponent',
+    range: { from: 0, to: 3 },
+  },
   'material.refractiveIndex': {
     label: 'Refractive index',
     dimension: 'dimensionless',

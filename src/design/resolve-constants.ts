@@ -2,6 +2,7 @@ import type { Fault } from '../errors';
 import {
   absorptionLines,
   conductivity,
+  conductivityExponent,
   crystalValue,
   expansion,
   findCrystal,
@@ -46,6 +47,10 @@ function bodyConstants(crystal: Crystal, design: Design, book: ConstantBook) {
       conductivity(crystal, along),
       ownValue(ownAxial, 'thermalConductivity'),
     ),
+    conductivityExponent:
+      design.rod.conductivityLaw === 'constant'
+        ? 0
+        : book.take('material.conductivityExponent', conductivityExponent(crystal)),
     expansion: book.take('material.expansionAlong', expansion(crystal, along)),
     expansionAcross: book.take('material.expansionAcross', acrossExpansion),
     youngModulus: book.take('material.youngModulus', crystalValue(crystal, 'youngModulus')),

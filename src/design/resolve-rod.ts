@@ -127,6 +127,7 @@ export function resolveRod(design: Design, choice: Choice): { rod: ResolvedRod; 
       backCap: valueOf(rod.endCaps.back, 'length'),
       conductivityRadial: values.conductivityRadial,
       conductivityAxial: values.conductivityAxial,
+      conductivityExponent: values.conductivityExponent,
       refractiveIndex: values.refractiveIndex,
       thermoOptic: values.thermoOptic,
       expansion: values.expansion,

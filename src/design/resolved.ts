@@ -68,6 +68,8 @@ export interface ResolvedRod {
   backCap: number;
   conductivityRadial: number;
   conductivityAxial: number;
+  /** m of k(T) = k (300 K / T)^m; 0: constant. */
+  conductivityExponent: number;
   refractiveIndex: number;
   thermoOptic: number;
   /** Along the rod, 1/K. */

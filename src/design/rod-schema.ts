@@ -18,6 +18,14 @@ const valuesSchema = v.strictObject({
       { empty: 'the conductivity across the axis where that is entered, else the value of the catalogue' },
     ),
   ),
+  conductivityExponent: v.optional(
+    plainNumber(
+      'Fall of the conductivity',
+      { from: 0, to: 3 },
+      'm of k(T) = k (300 K / T)^m; used where the conductivity falls with temperature',
+      ofCatalogue,
+    ),
+  ),
   thermoOptic: v.optional(
     quantity(
       'expansion',
@@ -186,6 +194,14 @@ export const rodSchema = v.strictObject({
   laserLine: wavelength('Laser line', 'The nearest line of the crystal is taken', { example: '1064 nm' }),
   absorption: v.optional(absorptionSchema, 'from crystal'),
   heatFraction: v.optional(heatFractionSchema, 'from laser'),
+  conductivityLaw: v.optional(
+    choice(
+      'Conductivity law',
+      ['constant', 'falls with temperature'],
+      'Constant: the value near 300 K throughout. Falling: k (300 K / T)^m; every answer then takes several times longer',
+    ),
+    'constant',
+  ),
   faceFilm: v.optional(
     quantity(
       'heatTransferCoefficient',

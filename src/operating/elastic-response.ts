@@ -12,7 +12,7 @@ import {
   type PlacedValue,
   type StressField,
 } from '../elastic';
-import { heatSource, solveRod, type RodConduction, type RodGrid } from '../heat';
+import { heatSource, solveRod, type RodConduction, type RodField, type RodGrid } from '../heat';
 import { sumOf } from './absorbed';
 import type { PumpSpread } from './prepare';
 
@@ -146,7 +146,8 @@ export function prepareElastic(
   const { grid } = conduction;
   const base =
     like && like.base.key === keyOf(resolved, grid) ? like.base : elasticBase(resolved, conduction);
-  const starts = stretches(grid, held);
+  // Answers add up only where conduction is linear; otherwise every point is solved by itself.
+  const starts = conduction.law.exponent === 0 ? stretches(grid, held) : [];
   const columns = starts.slice(1).map((end, k) => {
     const part = new Float64Array(grid.nz);
     const from = starts[k]!;
@@ -157,8 +158,24 @@ export function prepareElastic(
   return { base, mesh: base.assembled.mesh, columns, starts };
 }
 
-/** Adds up the answers for the heat of each axial cell, W. */
-export function elasticState({ columns, starts, mesh }: ElasticResponse, heat: Float64Array): ElasticState {
+/** Stress and bulge of a field solved by itself. */
+function solvedState(base: ElasticBase, index: number, field: RodField): ElasticState {
+  const solution = solveElastic(base.assembled, rodTemperature(base.map, field));
+  return { peakTensile: peakTensile(solution), ...bulgePower(solution.displacement, index, base.weights) };
+}
+
+/**
+ * Adds up the answers for the heat of each axial cell; where conduction is not linear, solves the field itself.
+ * @param heat W in each axial cell
+ */
+export function elasticState(
+  response: ElasticResponse,
+  index: number,
+  field: RodField,
+  heat: Float64Array,
+): ElasticState {
+  const { base, columns, starts, mesh } = response;
+  if (columns.length === 0) return solvedState(base, index, field);
   const size = columns[0]!.stress.length;
   const sum = new Float64Array(size);
   let front = 0;
@@ -177,6 +194,6 @@ export function elasticState({ columns, starts, mesh }: ElasticResponse, heat: F
     for (let n = 0; n < nodes; n++) values[n] = sum[4 * n + offset]!;
     return values;
   };
-  const field = { mesh, radial: pick(0), hoop: pick(1), axial: pick(2), shear: pick(3), surfaceResidual: 0 };
-  return { peakTensile: peakTensile(field), front, back };
+  const stress = { mesh, radial: pick(0), hoop: pick(1), axial: pick(2), shear: pick(3), surfaceResidual: 0 };
+  return { peakTensile: peakTensile(stress), front, back };
 }

@@ -1,5 +1,6 @@
 import { planeMode } from '../cavity';
 import { dewPoint, type CoolerLimit, type CoolerState } from '../cooling';
+import { NumericalError } from '../errors';
 import { heatSource, meanWithin, solveRod, type RodField } from '../heat';
 import {
   closeLoop,
@@ -17,6 +18,8 @@ import { rodLens, type RodLens } from './rod-lens';
 import { sectionStressEstimate } from './section-estimate';
 import type { OperatingPoint } from './types';
 
+const noRodState = 'the conductivity of the rod falls faster with temperature than this heat can leave it';
+
 /** An operating point with what the studies and the drawings need beside its numbers. */
 export interface SolvedPoint {
   point: OperatingPoint;
@@ -26,14 +29,37 @@ export interface SolvedPoint {
   lens: RodLens;
 }
 
-function fieldOf(prepared: PreparedDesign, loop: LoopState): { field: RodField; cellHeat: Float64Array } {
+/** The rod's temperatures; where its falling conductivity lets no heat of this size out, those at constant conductivity. */
+function fieldOf(
+  prepared: PreparedDesign,
+  loop: LoopState,
+): { field: RodField; cellHeat: Float64Array; exists: boolean } {
   const { grid, conduction, pump, resolved } = prepared;
   const inside = 1 - pump.clipped || 1;
   const heatPower = (loop.enteringPower * loop.split.heat) / inside;
   const source = heatSource(grid, pump.heatShares, loop.deposit, heatPower);
   const { ambient } = resolved.surroundings;
-  const field = solveRod(conduction, source, { side: loop.mountTemperature, front: ambient, back: ambient });
-  return { field, cellHeat: loop.deposit.map((share) => share * heatPower) };
+  const boundary = { side: loop.mountTemperature, front: ambient, back: ambient };
+  const cellHeat = loop.deposit.map((share) => share * heatPower);
+  if (conduction === prepared.linear)
+    return { field: solveRod(conduction, source, boundary), cellHeat, exists: true };
+  try {
+    const field = solveRod(conduction, source, boundary);
+    if (Number.isFinite(field.peakTemperature)) return { field, cellHeat, exists: true };
+  } catch (reason) {
+    if (!(reason instanceof NumericalError)) throw reason;
+  }
+  return { field: solveRod(prepared.linear, source, boundary), cellHeat, exists: false };
+}
+
+/**
+ * The heat that reaches the base as the field itself has it. Inside the loop the share that the faces lose is that of
+ * the conductivity at 300 K; what it errs by is a share of a share, and is put right here so that the ledger closes.
+ */
+function asSolved(prepared: PreparedDesign, loop: LoopState, field: RodField): LoopState {
+  if (prepared.conduction === prepared.linear) return loop;
+  const mountHeat = field.heatOut.side;
+  return { ...loop, mountHeat, baseHeat: loop.baseHeat + mountHeat - loop.mountHeat };
 }
 
 /** The mean temperature of the pumped rod, for the Boltzmann shares of a quasi-three-level line. */
@@ -96,30 +122,32 @@ export function solvePoint(prepared: PreparedDesign, question: Question, start?:
   const { resolved } = prepared;
   const { surroundings, rod, limits } = resolved;
   const { pumpPower } = question;
-  const { state: loop, converged } = closeLoop(
+  const { state: closed, converged } = closeLoop(
     prepared,
     question,
     start ?? surroundings.ambient + 10,
     rodTemperatureOf(prepared),
   );
+  const { field, cellHeat, exists } = fieldOf(prepared, closed);
+  const loop = asSolved(prepared, closed, field);
   const cooler = question.cooler.cooler.settle(loop.baseHeat, surroundings);
   const diodeHeat = diodeHeatOf(prepared, pumpPower);
   const separate =
     resolved.diode.circuit === 'separate' && resolved.diode.caseTemperature === null
       ? question.cooler.cooler.settle(diodeHeat, surroundings)
       : null;
-  const { field, cellHeat } = fieldOf(prepared, loop);
-  const elastic = elasticState(prepared.elastic, cellHeat);
+  const elastic = elasticState(prepared.elastic, rod.refractiveIndex, field, cellHeat);
   const lens = rodLens(resolved, prepared.lens, field, elastic);
   const sagittal = planeMode(prepared.cavity, lens.optics, 'sagittal', rod.laser.wavelength);
   const tangential = planeMode(prepared.cavity, lens.optics, 'tangential', rod.laser.wavelength);
   const modeRadius = meanRadius(sagittal.modeRadiusInRod, tangential.modeRadiusInRod);
   const output = outputOf(prepared, question, loop, field, lens, modeRadius);
-  const steady = converged && cooler.state === 'steady' && (separate === null || separate.state === 'steady');
+  const steady =
+    converged && exists && cooler.state === 'steady' && (separate === null || separate.state === 'steady');
   const reason =
     cooler.reason ??
     separate?.reason ??
-    (converged ? undefined : 'no base temperature below 700 K takes this heat');
+    (!converged ? 'no base temperature below 700 K takes this heat' : exists ? undefined : noRodState);
   const ledger = ledgerOf(prepared, loop, cooler, separate, {
     pumpPower,
     outputPower: output.power,

@@ -51,6 +51,8 @@ export interface PreparedDesign {
   model: RodHeatModel;
   grid: RodGrid;
   conduction: RodConduction;
+  /** The same with the conductivity it has at 300 K; the same object where the conductivity is constant. */
+  linear: RodConduction;
   pump: PumpSpread;
   deposits: DepositTable;
   /** Whether absorption depends on the diode's wavelength at all. */
@@ -72,6 +74,7 @@ function heatModel({ rod, mount }: ResolvedDesign): RodHeatModel {
     backCap: rod.backCap,
     conductivityRadial: rod.conductivityRadial,
     conductivityAxial: rod.conductivityAxial,
+    conductivityExponent: rod.conductivityExponent,
     side: {
       kind: 'ring',
       contactConductance: mount.contactConductance,
@@ -188,7 +191,8 @@ export function prepareDesign(
     cells,
     bothEnds: pump.passes === 2,
   });
-  const conduction = assembleRod(model, grid);
+  const linear = assembleRod({ ...model, conductivityExponent: 0 }, grid);
+  const conduction = rod.conductivityExponent === 0 ? linear : assembleRod(model, grid);
   const spread = spreadOf(resolved, grid, beam);
   const drifts = rod.absorption.kind !== 'coefficient';
   const deposits = new DepositTable(resolved, grid, absorption);
@@ -197,11 +201,12 @@ export function prepareDesign(
     model,
     grid,
     conduction,
+    linear,
     pump: spread,
     deposits,
     drifts,
     caseWindow: windowOf(resolved),
-    baseHeat: baseHeatOf(conduction, spread),
+    baseHeat: baseHeatOf(linear, spread),
     elastic: prepareElastic(
       resolved,
       conduction,

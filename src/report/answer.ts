@@ -13,6 +13,7 @@ import type { SweepPoint } from '../study/types';
 import { zonesOf } from '../study/zones';
 import { bandSteps, type BandResult } from './answer-band';
 import { binAdvice } from './bin-advice';
+import { conductivityRemark } from './conductivity-remark';
 import { cautionsOf } from './cautions';
 import { comparisonsOf } from './comparisons';
 import { picturesOf } from './pictures';
@@ -148,7 +149,11 @@ function assemble(findings: Findings, band: BandResult | null): Answer {
     format: 'pump-ceiling/report',
     version: 1,
     title: resolved.title,
-    warnings: [...resolved.warnings, ...pointWarnings(prepared, level.lasing)],
+    warnings: [
+      ...resolved.warnings,
+      ...pointWarnings(prepared, level.lasing),
+      ...(band ? conductivityRemark(findings.design, chosen, level.lasing) : []),
+    ],
     verdict: verdictOf(parts),
     chosenCooler: resolved.chosenCooler,
     operating,
