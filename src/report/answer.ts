@@ -13,6 +13,7 @@ import type { SweepPoint } from '../study/types';
 import { zonesOf } from '../study/zones';
 import { bandSteps, type BandResult } from './answer-band';
 import { binAdvice } from './bin-advice';
+import { accuracyOf } from './accuracy';
 import { conductivityRemark } from './conductivity-remark';
 import { cautionsOf } from './cautions';
 import { comparisonsOf } from './comparisons';
@@ -169,6 +170,7 @@ function assemble(findings: Findings, band: BandResult | null): Answer {
       cavityEdge: band?.edge?.contributors ?? [],
     },
     sweep: findings.sweep,
+    accuracy: band ? accuracyOf(resolved, chosen, level.lasing) : null,
     comparisons: comparisonsOf(prepared, level.lasing, cavityEdge),
     constants: resolved.constants,
     cautions: cautionsOf(resolved, options, operating.outputPower),

@@ -127,6 +127,15 @@ function edgeText(report: Report): string {
   return `Cavity edge: ${watts(edge.pumpPower, 4)} (${edge.plane} plane, lens ${number(edge.dioptricPower, 4)} /m${ends}). ${window}`;
 }
 
+/** What the grid alone may have moved. */
+function accuracyText({ accuracy }: Report): string[] {
+  if (!accuracy) return [];
+  const { dioptricPower, peakTemperature } = accuracy;
+  return [
+    `Grid error at most about ${number(peakTemperature, 2)} K of the peak and ${number(dioptricPower, 2)} /m of the lens; the constants err far more.`,
+  ];
+}
+
 /**
  * The report as a page of text for a terminal: verdict, ceilings, ladder, cavity edge, state, limits, mounts, warnings.
  * Temperatures in degC, lens power in 1/m, converging positive.
@@ -143,6 +152,7 @@ export function reportText(report: Report): string {
     table([['pump power', 'least demanding cooling that holds'], ...ladder]),
     edgeText(report),
     table(stateRows(report)),
+    ...accuracyText(report),
     table(marginRows(report)),
     table(mountRows(report)),
   ];

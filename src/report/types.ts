@@ -104,6 +104,8 @@ export interface Report {
   contributors: { ceiling: Contributor[]; cavityEdge: Contributor[] };
   sweep: SweepPoint[];
   comparisons: Comparison[];
+  /** Estimated error of the grid at the operating point, 1/m, K and Pa; null until it is computed. */
+  accuracy: { dioptricPower: number; peakTemperature: number; peakTensile: number } | null;
   constants: ConstantUsed[];
   cautions: string[];
   /** Pump power up to which ceilings were searched. */
