@@ -1,7 +1,7 @@
-import { toJsonSchema } from '@valibot/to-json-schema';
+import { toJsonSchema, type JsonSchema } from '@valibot/to-json-schema';
 import { describeRange, exampleOf, type FieldNote } from './field-note';
 import { designSchema } from './schema';
-import { alternativesNoteOf, noteOf, type AnySchema } from './schema-walk';
+import type { MetadataStep } from './schema-walk';
 
 /** Meaning, allowed range, words and what holds where nothing is given, in a row. */
 function descriptionOf(note: FieldNote): string {
@@ -36,6 +36,19 @@ function typeOf(note: FieldNote): Record<string, unknown> {
   return { type: 'string', examples: [exampleOf(note), ...Object.keys(note.words ?? {})] };
 }
 
+/** What the metadata of a field or choice of shapes says, as JSON Schema says it. */
+function noted(action: unknown, jsonSchema: JsonSchema): JsonSchema | undefined {
+  const { note, alternatives } = (action as Partial<MetadataStep>).metadata ?? {};
+  const kept = Object.fromEntries(
+    Object.entries(jsonSchema).filter(([key]) => key !== 'note' && key !== 'alternatives'),
+  );
+  if (alternatives)
+    return { ...kept, title: alternatives.label, description: `${alternatives.hint ?? alternatives.label}.` };
+  if (!note) return undefined;
+  const examples = note.catalogue ? { examples: [...note.catalogue] } : {};
+  return { ...kept, ...typeOf(note), ...examples, title: note.label, description: descriptionOf(note) };
+}
+
 /**
  * JSON Schema (draft 2020-12) of the design file, made from the schema the program itself checks with.
  * Quantities appear as strings whose description states meaning, dimension and allowed range; names of a catalogue as
@@ -46,22 +59,7 @@ export function designJsonSchema(): Record<string, unknown> {
     typeMode: 'input',
     target: 'draft-2020-12',
     errorMode: 'ignore',
-    overrideSchema: ({ valibotSchema, jsonSchema }) => {
-      const found = valibotSchema as unknown as AnySchema;
-      const shapes = alternativesNoteOf(found);
-      if (shapes)
-        return { ...jsonSchema, title: shapes.label, description: `${shapes.hint ?? shapes.label}.` };
-      const note = noteOf(found);
-      if (!note) return undefined;
-      const examples = note.catalogue ? { examples: [...note.catalogue] } : {};
-      return {
-        ...jsonSchema,
-        ...typeOf(note),
-        ...examples,
-        title: note.label,
-        description: descriptionOf(note),
-      };
-    },
+    overrideAction: ({ valibotAction, jsonSchema }) => noted(valibotAction, jsonSchema),
   });
   return {
     ...schema,

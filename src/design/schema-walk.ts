@@ -2,6 +2,12 @@ import type * as v from 'valibot';
 import type { FieldNote } from './field-note';
 import type { AlternativesNote } from './quantity-field';
 
+/** A step of a schema that carries what a screen shows. */
+export interface MetadataStep {
+  type: string;
+  metadata?: { note?: FieldNote; alternatives?: AlternativesNote };
+}
+
 /** The parts of a schema that walking it needs; a schema library does not type them for unknown schemas. */
 export type AnySchema = v.GenericSchema & {
   wrapped?: AnySchema;
@@ -11,7 +17,7 @@ export type AnySchema = v.GenericSchema & {
   item?: AnySchema;
   options?: AnySchema[];
   literal?: unknown;
-  pipe?: { type: string; metadata?: { note?: FieldNote; alternatives?: AlternativesNote } }[];
+  pipe?: MetadataStep[];
 };
 
 const metadataOf = (schema: AnySchema) =>

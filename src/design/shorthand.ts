@@ -1,11 +1,15 @@
 import { under } from './schema-walk';
 
-/** Parts that may be written as one text, the words that already have a meaning there, and the key the text stands for. */
+/** A text that means to be a quantity; any other is a word, right or wrong, and judged as one. */
+const quantityLike = /^\s*[+-]?\.?\d/;
+const anyText = /^/;
+
+/** Parts that may be written as one text, what such a text looks like, and the key it stands for. */
 const shorthands = [
-  { group: 'rod', part: 'heatFraction', words: ['from laser', 'quantum defect'], key: 'lasing' },
-  { group: 'rod', part: 'absorption', words: ['from crystal'], key: 'coefficient' },
-  { group: 'mount', part: 'interface', words: [], key: 'kind' },
-] as const;
+  { group: 'rod', part: 'heatFraction', looks: quantityLike, key: 'lasing' },
+  { group: 'rod', part: 'absorption', looks: quantityLike, key: 'coefficient' },
+  { group: 'mount', part: 'interface', looks: anyText, key: 'kind' },
+];
 
 /**
  * Writes a part given as one text in full: "heatFraction": "27 %" is { "lasing": "27 %" }, "absorption": "4.5 cm^-1" is
@@ -14,10 +18,10 @@ const shorthands = [
  */
 export function expandShorthand(input: object): object {
   let expanded = input as Record<string, unknown>;
-  for (const { group, part, words, key } of shorthands) {
+  for (const { group, part, looks, key } of shorthands) {
     const holder = under(expanded, group);
     const text = under(holder, part);
-    if (typeof text !== 'string' || (words as readonly string[]).includes(text)) continue;
+    if (typeof text !== 'string' || !looks.test(text)) continue;
     expanded = { ...expanded, [group]: { ...(holder as object), [part]: { [key]: text } } };
   }
   return expanded;

@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { checkDesign, longestDesign, readDesign } from '../../src/design/check';
 import { demoDesign } from '../../src/design/demo';
-import { fieldsOf, withValue } from '../../src/design/fields';
+import { fieldsOf, valueAt, withValue } from '../../src/design/fields';
 import { formatQuantity } from '../../src/quantity';
 import { DesignError } from '../../src/errors';
 import { checked, faultsOf, inputs, vanadate } from './designs';
@@ -174,6 +174,23 @@ describe('the messages', () => {
     const [fault] = after(vanadate, 'mount.material', 'aluminum 6061');
     expect(fault?.message ?? '').toMatch(/^$|did you mean "aluminium 6061"\?/);
     expect(after(vanadate, 'rod.crystal', 'NdYVO')[0]!.message).toMatch(/did you mean "Nd:YVO4"\?/);
+  });
+
+  test.each([
+    ['rod.absorption', '4.5 cm^-1', { coefficient: '4.5 cm^-1', drift: 'ignored' }],
+    ['rod.heatFraction', '27 %', { lasing: '27 %' }],
+    ['mount.interface', 'indium foil', { kind: 'indium foil' }],
+  ])('of %s = "%s" are none: one text stands for the group', (path, text, group) => {
+    expect(valueAt(checked(withValue(vanadate, path, text)), path)).toEqual(group);
+  });
+
+  test.each([
+    ['rod.absorption', '4.5 W', 'rod.absorption.coefficient'],
+    ['rod.heatFraction', '120 %', 'rod.heatFraction.lasing'],
+    ['rod.heatFraction', 'quantum deffect', 'rod.heatFraction'],
+    ['mount.interface', 'glue', 'mount.interface.kind'],
+  ])('of %s = "%s" name %s', (path, text, at) => {
+    expect(after(vanadate, path, text).map((fault) => fault.path)).toEqual([at]);
   });
 
   test('name every unknown key, not the first alone', () => {
