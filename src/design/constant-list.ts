@@ -87,6 +87,24 @@ export const constantList = {
     own: 'rod.values.conductivityExponent',
     range: { from: 0, to: 3 },
   },
+  'material.photoelastic11': {
+    label: 'Photoelastic p11',
+    dimension: 'dimensionless',
+    unit: '1',
+    range: anySign,
+  },
+  'material.photoelastic12': {
+    label: 'Photoelastic p12',
+    dimension: 'dimensionless',
+    unit: '1',
+    range: anySign,
+  },
+  'material.photoelastic44': {
+    label: 'Photoelastic p44',
+    dimension: 'dimensionless',
+    unit: '1',
+    range: anySign,
+  },
   'material.refractiveIndex': {
     label: 'Refractive index',
     dimension: 'dimensionless',

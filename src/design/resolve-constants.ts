@@ -59,12 +59,26 @@ function bodyConstants(crystal: Crystal, design: Design, book: ConstantBook) {
   };
 }
 
+/** Photoelastic coefficients of a cubic crystal, where all three are known. */
+function photoelasticConstants(crystal: Crystal, book: ConstantBook) {
+  const [p11, p12, p44] = (['11', '12', '44'] as const).map((of) =>
+    crystalValue(crystal, `photoelastic${of}`),
+  );
+  if (crystal.symmetry !== 'isotropic' || !p11 || !p12 || !p44) return null;
+  return {
+    p11: book.take('material.photoelastic11', p11),
+    p12: book.take('material.photoelastic12', p12),
+    p44: book.take('material.photoelastic44', p44),
+  };
+}
+
 /** What the laser's light sees, in its own polarisation. */
 function lightConstants(crystal: Crystal, line: LaserLine, design: Design, book: ConstantBook) {
   const polarisation = laserPolarisation(crystal, line, design.rod.cut);
   const yieldOfPump = crystalValue(crystal, 'pumpQuantumYield');
   return {
     refractiveIndex: book.take('material.refractiveIndex', refractiveIndex(crystal, polarisation)),
+    photoelastic: photoelasticConstants(crystal, book),
     thermoOptic: book.take('material.thermoOptic', thermoOptic(crystal, polarisation)),
     emissionCrossSection: book.take('material.emissionCrossSection', line.emissionCrossSection),
     lifetime: book.take('material.lifetime', crystalValue(crystal, 'upperLevelLifetime')),

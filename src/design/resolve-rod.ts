@@ -108,7 +108,6 @@ function rodWarnings({ rod }: Design, crystal: Crystal, line: LaserLine): Warnin
       'rod.crystal',
       `${crystal.name} is biaxial: heat is computed along its axes, light in the two polarisations of the catalogue; the cuts in use lie between.`,
     );
-  add('lens.photoelastic', 'The photoelastic part of the lens is not computed; it is taken as zero.');
   return warnings;
 }
 
@@ -129,6 +128,7 @@ export function resolveRod(design: Design, choice: Choice): { rod: ResolvedRod; 
       conductivityAxial: values.conductivityAxial,
       conductivityExponent: values.conductivityExponent,
       refractiveIndex: values.refractiveIndex,
+      photoelastic: values.photoelastic,
       thermoOptic: values.thermoOptic,
       expansion: values.expansion,
       expansionAcross: values.expansionAcross,

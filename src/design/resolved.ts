@@ -71,6 +71,8 @@ export interface ResolvedRod {
   /** m of k(T) = k (300 K / T)^m; 0: constant. */
   conductivityExponent: number;
   refractiveIndex: number;
+  /** Coefficients of a cubic crystal; null where they are not known. */
+  photoelastic: { p11: number; p12: number; p44: number } | null;
   thermoOptic: number;
   /** Along the rod, 1/K. */
   expansion: number;

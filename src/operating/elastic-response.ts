@@ -13,6 +13,7 @@ import {
   type StressField,
 } from '../elastic';
 import { heatSource, solveRod, type RodConduction, type RodField, type RodGrid } from '../heat';
+import { modeSection, stressAlongRod, type ModeSection, type StressAlongRod } from '../lens';
 import { sumOf } from './absorbed';
 import type { PumpSpread } from './prepare';
 
@@ -25,12 +26,14 @@ interface ElasticBase {
   assembled: ReturnType<typeof assembleElastic>;
   map: ReturnType<typeof rodTemperatureMap>;
   weights: Float64Array;
+  section: ModeSection;
 }
 
 /** Stress and bulge per watt of heat in one stretch of the rod. */
 interface Column {
   /** Radial, hoop, axial, shear at node n at 4 n. */
   stress: Float64Array;
+  along: StressAlongRod;
   front: number;
   back: number;
 }
@@ -50,6 +53,8 @@ export interface ElasticResponse {
 
 export interface ElasticState {
   peakTensile: PlacedValue;
+  /** Integrated along the rod, for the photoelastic path. */
+  along: StressAlongRod;
   /** Dioptric power of the bulge of each face, 1/m. */
   front: number;
   back: number;
@@ -78,6 +83,7 @@ function elasticBase(resolved: ResolvedDesign, conduction: RodConduction): Elast
     assembled,
     map: rodTemperatureMap(assembled, conduction),
     weights: curvatureWeights(mesh, cavity.lensRadius),
+    section: modeSection(mesh.radialNodes, cavity.lensRadius),
   };
 }
 
@@ -127,7 +133,11 @@ function columnOf(
     stress[4 * n + 2] = axial[n]!;
     stress[4 * n + 3] = shear[n]!;
   }
-  return { stress, ...bulgePower(solution.displacement, index, base.weights) };
+  return {
+    stress,
+    along: stressAlongRod(solution),
+    ...bulgePower(solution.displacement, index, base.weights),
+  };
 }
 
 /**
@@ -158,10 +168,29 @@ export function prepareElastic(
   return { base, mesh: base.assembled.mesh, columns, starts };
 }
 
+const emptyAlong = ({ radii }: StressAlongRod): StressAlongRod => ({
+  radii,
+  radial: new Float64Array(radii.length),
+  hoop: new Float64Array(radii.length),
+  axial: new Float64Array(radii.length),
+});
+
+function addAlong(sum: StressAlongRod, weight: number, part: StressAlongRod): void {
+  for (let i = 0; i < sum.radii.length; i++) {
+    sum.radial[i] = sum.radial[i]! + weight * part.radial[i]!;
+    sum.hoop[i] = sum.hoop[i]! + weight * part.hoop[i]!;
+    sum.axial[i] = sum.axial[i]! + weight * part.axial[i]!;
+  }
+}
+
 /** Stress and bulge of a field solved by itself. */
 function solvedState(base: ElasticBase, index: number, field: RodField): ElasticState {
   const solution = solveElastic(base.assembled, rodTemperature(base.map, field));
-  return { peakTensile: peakTensile(solution), ...bulgePower(solution.displacement, index, base.weights) };
+  return {
+    peakTensile: peakTensile(solution),
+    along: stressAlongRod(solution),
+    ...bulgePower(solution.displacement, index, base.weights),
+  };
 }
 
 /**
@@ -178,6 +207,7 @@ export function elasticState(
   if (columns.length === 0) return solvedState(base, index, field);
   const size = columns[0]!.stress.length;
   const sum = new Float64Array(size);
+  const along = emptyAlong(columns[0]!.along);
   let front = 0;
   let back = 0;
   for (let k = 0; k < columns.length; k++) {
@@ -186,6 +216,7 @@ export function elasticState(
     for (let j = starts[k]!; j < starts[k + 1]!; j++) weight += heat[j]!;
     front += weight * ofFront;
     back += weight * ofBack;
+    addAlong(along, weight, columns[k]!.along);
     for (let n = 0; n < size; n++) sum[n] = sum[n]! + weight * stress[n]!;
   }
   const nodes = size / 4;
@@ -195,5 +226,5 @@ export function elasticState(
     return values;
   };
   const stress = { mesh, radial: pick(0), hoop: pick(1), axial: pick(2), shear: pick(3), surfaceResidual: 0 };
-  return { peakTensile: peakTensile(stress), front, back };
+  return { peakTensile: peakTensile(stress), along, front, back };
 }

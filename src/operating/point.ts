@@ -12,6 +12,7 @@ import {
 } from './closed-loop';
 import { elasticState } from './elastic-response';
 import { ledgerOf } from './ledger';
+import { photoelasticPart } from './photoelastic-part';
 import { overlapRings, type PreparedDesign } from './prepare';
 import { lase } from './rod-laser';
 import { rodLens, type RodLens } from './rod-lens';
@@ -137,7 +138,9 @@ export function solvePoint(prepared: PreparedDesign, question: Question, start?:
       ? question.cooler.cooler.settle(diodeHeat, surroundings)
       : null;
   const elastic = elasticState(prepared.elastic, rod.refractiveIndex, field, cellHeat);
-  const lens = rodLens(resolved, prepared.lens, field, elastic);
+  const { weights, section } = prepared.elastic.base;
+  const stressed = photoelasticPart(resolved, elastic.along, weights, section);
+  const lens = rodLens(resolved, prepared.lens, field, elastic, stressed);
   const sagittal = planeMode(prepared.cavity, lens.optics, 'sagittal', rod.laser.wavelength);
   const tangential = planeMode(prepared.cavity, lens.optics, 'tangential', rod.laser.wavelength);
   const modeRadius = meanRadius(sagittal.modeRadiusInRod, tangential.modeRadiusInRod);
@@ -185,7 +188,13 @@ export function solvePoint(prepared: PreparedDesign, question: Question, start?:
       axisDioptricPower: lens.axisPower,
       thermoOptic: lens.thermoOptic,
       bulge: lens.bulge,
-      photoelastic: 0,
+      photoelastic: stressed.mean,
+      photoelasticRadial: stressed.radial,
+      photoelasticTangential: stressed.tangential,
+      photoelasticUnknown: stressed.unknown,
+      depolarisedShare: stressed.depolarisedShare,
+      residualPath: lens.residualPath,
+      quarticTerm: lens.quarticTerm,
       aberrationLoss: lens.aberrationLoss,
       weightRadius: resolved.cavity.lensRadius,
       estimate: lens.estimate,

@@ -8,10 +8,13 @@ import {
   opticalPathProfile,
   planeStressBulge,
   prepareLens as prepareGeometry,
+  quarticTerm,
   weighLens,
   type LensGeometry,
   type LensWeights,
 } from '../lens';
+
+import type { PhotoelasticPart } from './photoelastic-part';
 
 /** Slices of the rod that the cavity gets; each is an exact graded-index duct, so few are enough. */
 const mostSlices = 12;
@@ -46,14 +49,20 @@ export interface RodLens {
   thermoOptic: number;
   /** Both faces. */
   bulge: number;
+  photoelastic: PhotoelasticPart;
   aberrationLoss: number;
+  /** Root mean square over the mode of what the parabola leaves of the optical path, m. */
+  residualPath: number;
+  /** The r4 term of the optical path, 1/m3. */
+  quarticTerm: number;
   optics: RodOptics;
   /** Both parts from closed forms on the same temperatures: plane-stress bulge. */
   estimate: number;
 }
 
 /**
- * The lens of a temperature field and of the bulge of its faces.
+ * The lens of a temperature field, of the bulge of its faces and of its stress. Bulge and stress follow the temperature
+ * over the mode, so their share of the path is given the shape of the thermo-optic one.
  * @param bulge dioptric power of the front and the back face, 1/m
  */
 export function rodLens(
@@ -61,6 +70,7 @@ export function rodLens(
   prepared: PreparedLens,
   field: RodField,
   bulge: { front: number; back: number },
+  photoelastic: PhotoelasticPart,
 ): RodLens {
   const { rod } = resolved;
   const { geometry, weights, sliceStarts, sliceLengths } = prepared;
@@ -68,23 +78,27 @@ export function rodLens(
   const thermoOptic = rod.thermoOptic * fit.power;
   const faces = bulge.front + bulge.back;
   const slices = new Float64Array(sliceLengths.length);
+  const perKelvin = (power: number) => (fit.power === 0 ? 0 : power / fit.power);
+  const inside = rod.thermoOptic + perKelvin(photoelastic.mean);
   for (let k = 0; k < slices.length; k++)
     for (let j = sliceStarts[k]!; j < sliceStarts[k + 1]!; j++)
-      slices[k] = slices[k]! + rod.thermoOptic * fit.slicePowers[j]!;
+      slices[k] = slices[k]! + inside * fit.slicePowers[j]!;
   const both = { sagittal: slices, tangential: slices };
   const front = { sagittal: bulge.front, tangential: bulge.front };
   const back = { sagittal: bulge.back, tangential: bulge.back };
-  // The bulge follows the temperature over the mode, so its share of the path has the shape of the thermo-optic one.
-  const bulgeRate = fit.power === 0 ? 0 : faces / fit.power;
-  const rate = rod.thermoOptic + bulgeRate;
+  const rate = inside + perKelvin(faces);
   const profile = opticalPathProfile(field, geometry);
   for (let q = 0; q < profile.length; q++) profile[q] = profile[q]! * rate;
+  const parabola = fitProfile(weights, profile);
   return {
-    power: thermoOptic + faces,
+    power: thermoOptic + faces + photoelastic.mean,
     axisPower: rate * fit.axisPower,
     thermoOptic,
     bulge: faces,
-    aberrationLoss: aberrationLoss(weights, profile, fitProfile(weights, profile), rod.laser.wavelength),
+    photoelastic,
+    aberrationLoss: aberrationLoss(weights, profile, parabola, rod.laser.wavelength),
+    residualPath: parabola.residualRms,
+    quarticTerm: quarticTerm(weights, profile),
     optics: {
       refractiveIndex: rod.refractiveIndex,
       sliceLengths,

@@ -49,7 +49,18 @@ export interface OperatingPoint {
     axisDioptricPower: number;
     thermoOptic: number;
     bulge: number;
+    /** Mean of both polarisations; zero where the coefficients are not known. */
     photoelastic: number;
+    photoelasticRadial: number;
+    photoelasticTangential: number;
+    /** Where the coefficients are not known: how far the part may lie from zero, an order of magnitude. */
+    photoelasticUnknown: number;
+    /** Share of a linearly polarised mode in the crossed polarisation after one pass; null where not known. */
+    depolarisedShare: number | null;
+    /** Root mean square of the optical path that the parabola leaves over the mode, m. */
+    residualPath: number;
+    /** The r4 term of the optical path over the mode, 1/m3. */
+    quarticTerm: number;
     aberrationLoss: number;
     weightRadius: number;
     /** Closed-form estimate on the same heat, for comparison. */

@@ -54,7 +54,7 @@ export function comparisonsOf(
     ...axisLens(prepared, lasing),
     {
       name: 'Lens with face bulge, mode-weighted',
-      computed: lens.power,
+      computed: lens.thermoOptic + lens.bulge,
       estimate: lens.estimate,
       unit: '1/m',
       source:

@@ -1,4 +1,5 @@
 import { planeMode, type RodOptics } from '../cavity';
+import type { ResolvedDesign } from '../design/resolved';
 import type { Warning } from '../errors';
 import { peakExcitedShare } from '../laser';
 import type { SolvedPoint } from '../operating/point';
@@ -76,6 +77,18 @@ function polarisationRemark({ resolved }: PreparedDesign, { point }: SolvedPoint
   ];
 }
 
+/** The part of the lens that nobody can compute for want of coefficients. */
+function stressLensWarning({ rod }: ResolvedDesign, { point }: SolvedPoint): Warning[] {
+  const size = point.lens.photoelasticUnknown;
+  if (size === 0 || size < 0.01 * Math.abs(point.lens.dioptricPower)) return [];
+  return [
+    {
+      where: 'lens.photoelastic',
+      text: `The photoelastic coefficients of ${rod.crystalName} are not known well enough to compute with: this part of the lens is taken as zero; it may be of the order of plus or minus ${perMetre(size)}.`,
+    },
+  ];
+}
+
 function bleachingWarning(prepared: PreparedDesign, { point }: SolvedPoint): Warning[] {
   const { pump, rod } = prepared.resolved;
   const { laser } = rod;
@@ -117,6 +130,7 @@ export function pointWarnings(prepared: PreparedDesign, lasing: SolvedPoint): Wa
     ...absorptionWarnings({ centre: point.diode.wavelength, linewidth: pump.linewidth }, rod.absorption),
     ...clippingWarnings(pump.profile, Math.max(...beamRadii(grid.axialFaces, beam)), rod.radius),
     ...bleachingWarning(prepared, lasing),
+    ...stressLensWarning(resolved, lasing),
     ...signWarning(prepared, lasing),
     ...polarisationRemark(prepared, lasing),
     ...cooler.warnings,
