@@ -42,7 +42,9 @@ export class NumericalError extends Error {
     readonly residual: number,
     readonly cell?: number,
   ) {
-    super(`${where}: no convergence, residual ${residual}${cell === undefined ? '' : `, first bad cell ${cell}`}`);
+    super(
+      `${where}: no convergence, residual ${residual}${cell === undefined ? '' : `, first bad cell ${cell}`}`,
+    );
   }
 }
 

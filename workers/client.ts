@@ -63,7 +63,8 @@ export class SolverClient {
     const worker = this.create();
     worker.addEventListener('error', (event) => {
       event.preventDefault();
-      if (worker === this.worker) this.recover(`The solver stopped unexpectedly${event.message ? ` (${event.message})` : ''}`);
+      if (worker === this.worker)
+        this.recover(`The solver stopped unexpectedly${event.message ? ` (${event.message})` : ''}`);
     });
     worker.addEventListener('messageerror', () => {
       if (worker === this.worker) this.recover('The solver sent something that could not be read');
@@ -87,7 +88,11 @@ export class SolverClient {
     endpoint.answer(request, this.design, Comlink.proxy(listen)).catch((reason: unknown) => {
       if (request !== this.request) return;
       this.settle();
-      this.hear({ kind: 'failed', request, message: reason instanceof Error ? reason.message : String(reason) });
+      this.hear({
+        kind: 'failed',
+        request,
+        message: reason instanceof Error ? reason.message : String(reason),
+      });
     });
   }
 
@@ -110,7 +115,11 @@ export class SolverClient {
     this.restarts += 1;
     if (this.restarts > mostRestarts) {
       this.busy = false;
-      this.hear({ kind: 'failed', request: this.request, message: `${message}; it was given up after ${mostRestarts} restarts` });
+      this.hear({
+        kind: 'failed',
+        request: this.request,
+        message: `${message}; it was given up after ${mostRestarts} restarts`,
+      });
       return;
     }
     this.hear({ kind: 'restarted', request: this.request, message: `${message}; it was restarted` });

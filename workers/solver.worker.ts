@@ -26,7 +26,13 @@ async function run(request: number, design: unknown, listen: (reply: Reply) => v
   for (const step of answerSteps(checked.design)) {
     if (request !== latest) return listen({ kind: 'stopped', request });
     if (step.kind === 'answer')
-      listen({ kind: 'answer', request, answer: step.answer, final: step.final, milliseconds: performance.now() - started });
+      listen({
+        kind: 'answer',
+        request,
+        answer: step.answer,
+        final: step.final,
+        milliseconds: performance.now() - started,
+      });
     const now = performance.now();
     if (now - slice < sliceMilliseconds) continue;
     if (step.kind === 'progress') listen({ kind: 'progress', request, share: step.share, what: step.what });

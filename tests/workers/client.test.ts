@@ -15,7 +15,8 @@ class FakeThread extends EventTarget {
     const endpoint: SolverEndpoint = { answer, stop: () => undefined, ping: () => 1 };
     Comlink.expose(endpoint, this.channel.port2 as unknown as Comlink.Endpoint);
     this.channel.port1.addEventListener('message', (event) => {
-      if (!this.terminated) this.dispatchEvent(new MessageEvent('message', { data: event.data, ports: [...event.ports] }));
+      if (!this.terminated)
+        this.dispatchEvent(new MessageEvent('message', { data: event.data, ports: [...event.ports] }));
     });
     this.channel.port1.start();
     this.channel.port2.start();
@@ -119,7 +120,10 @@ describe('the page side of the solver', () => {
     start(never);
     client.ask({});
     vi.advanceTimersByTime(21_000);
-    expect(events[0]).toMatchObject({ kind: 'restarted', message: expect.stringContaining('no sign of life') });
+    expect(events[0]).toMatchObject({
+      kind: 'restarted',
+      message: expect.stringContaining('no sign of life'),
+    });
   });
 
   it('leaves an idle thread that dies alone until it is needed', async () => {

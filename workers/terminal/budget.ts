@@ -18,10 +18,14 @@ function readText(file: string): string {
     size = found.size;
   } catch (reason) {
     if (reason instanceof Refused) throw reason;
-    throw new Refused(`${file}: there is no such file, or it cannot be read; give the path of a design file.`);
+    throw new Refused(
+      `${file}: there is no such file, or it cannot be read; give the path of a design file.`,
+    );
   }
   if (size > 4 * longestDesign)
-    throw new Refused(`${file}: the file has ${(size / 1e6).toFixed(0)} MB; a design has at most ${longestDesign / 1e6} million characters.`);
+    throw new Refused(
+      `${file}: the file has ${(size / 1e6).toFixed(0)} MB; a design has at most ${longestDesign / 1e6} million characters.`,
+    );
   return readFileSync(file, 'utf8');
 }
 
@@ -38,7 +42,9 @@ function run(args: string[]): void {
   let text = '';
   for (const step of answerSteps(design))
     if (step.kind === 'answer' && step.final)
-      text = args.includes('--json') ? `${JSON.stringify(step.answer.report, null, 1)}\n` : reportText(step.answer.report);
+      text = args.includes('--json')
+        ? `${JSON.stringify(step.answer.report, null, 1)}\n`
+        : reportText(step.answer.report);
   process.stdout.write(text);
 }
 
