@@ -4,7 +4,7 @@ export { fanCooler, type FanCoolerSpec } from './fan';
 export type { FanSpec } from './fan-curve';
 export { type CoolantSupply, liquidCooler, type LiquidSpec } from './liquid';
 export { passiveCooler, type PassiveSpec } from './passive';
-export { finSpacing, type PlateFinSink } from './plate-fins';
+export type { PlateFinSink } from './plate-fins';
 export { resistanceCooler, type ResistanceSpec } from './resistance';
 export { tecCooler, type TecSpec } from './tec';
 export type { DataSheetSpec, LegSpec } from './thermopile';

@@ -6,6 +6,6 @@ export type { LaserInput, LaserOutput } from './output';
 export { flatTopOverlap, gaussianOverlap, ringOverlap, slopeOverlapAtThreshold } from './overlap';
 export { combineRings, overlapFaces, pumpRings } from './pump-rings';
 export type { PumpRings } from './pump-rings';
-export { reabsorptionLoss, roundTripLoss, thresholdAbsorbedPower } from './threshold';
+export { thresholdAbsorbedPower } from './threshold';
 export type { Reabsorption, ThresholdInput } from './threshold';
 export { laserWarnings, peakExcitedShare, pumpSecondMomentRadius } from './validity';

@@ -45,10 +45,6 @@ export const emissivities: Emissivity[] = emissivityRecords;
 export const pumpDiodes: PumpDiode[] = diodeRecords;
 export const thermoelectric: ThermoelectricMaterial = thermoelectricRecord;
 export const sources: Record<string, Source> = sourceRecords.sources;
-/** Where printed values disagree, in sentences. */
-export const disagreements: string[] = sourceRecords.disagreements;
-/** Which groups of values are weak, in sentences. */
-export const weakValues: string[] = sourceRecords.doNotTrust;
 
 export function findCrystal(name: string): Crystal | undefined {
   return findNamed(crystals, name);

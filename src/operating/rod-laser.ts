@@ -8,7 +8,6 @@ import {
   type LaserOutput,
   type PumpRings,
 } from '../laser';
-import { sumOf } from './absorbed';
 
 /** Where the absorbed power goes, as shares of it; they sum to 1. */
 export interface PowerSplit {
@@ -95,9 +94,3 @@ export function splitPower(resolved: ResolvedDesign, pumpWavelength: number, ext
   const lasing = Math.min(stimulated, light);
   return { heat, fluorescence: light - lasing, stimulated: lasing };
 }
-
-/** Mean temperature rise that a rod of unknown temperature starts its search with, K. */
-export const startingRise = 20;
-
-/** Rings of the pump with the deposit along the rod taken into account. */
-export const totalOf = (rings: PumpRings): number => sumOf(rings.shares);

@@ -4,7 +4,7 @@ export { beamRadii, beamRadius } from './beam';
 export type { FocusedBeam } from './beam';
 export { caseWindow } from './case-window';
 export type { CaseWindow, CaseWindowInput } from './case-window';
-export { absorbedAt, channelsAt, prepareAbsorption, pumpChannels } from './channels';
+export { channelsAt, prepareAbsorption, pumpChannels } from './channels';
 export type { PreparedAbsorption, PumpChannel } from './channels';
 export { absorbedShare, axialDeposit, unabsorbedShares } from './deposit';
 export { clippedShare, ringShares, shareWithin } from './profile';

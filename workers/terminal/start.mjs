@@ -16,10 +16,11 @@ try {
       `Port ${port} is in use, so the next free one, ${served.port}, is used (a browser keeps saved designs apart for each port).\n`,
     );
   }
-  process.stdout.write(`Pump Ceiling is at ${address} (Ctrl-C ends it)\n`);
+  // Before the address is told: whoever reads it may end the server at once.
   const end = () => served.close().then(() => process.exit(0));
   process.once('SIGINT', end);
   process.once('SIGTERM', end);
+  process.stdout.write(`Pump Ceiling is at ${address} (Ctrl-C ends it)\n`);
   if (open) openBrowser(address);
 } catch (error) {
   if (!(error instanceof SetUpError)) throw error;
