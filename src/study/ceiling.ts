@@ -36,11 +36,14 @@ function scanPowers(to: number, extra: readonly number[], levels: readonly numbe
   return all.sort((a, b) => a - b).filter((power, k, list) => k === 0 || power > list[k - 1]! * (1 + 1e-9));
 }
 
-/** A limit that is not listed at a power has nothing to bound there, and so holds. */
+/**
+ * A limit that is not listed at a power has nothing to bound there, and so holds; without a steady state that limit
+ * alone is broken, since the others have no value.
+ */
 const shareOf = (margins: readonly Margin[], limit: LimitName): number => {
   const found = margins.find((margin) => margin.limit === limit);
-  if (found) return found.holds ? Math.max(found.share, 0) : Math.min(found.share, -1e-12);
-  return margins.some((margin) => margin.limit === 'steady state' && !margin.holds) ? -1 : 1;
+  if (!found) return 1;
+  return found.holds ? Math.max(found.share, 0) : Math.min(found.share, -1e-12);
 };
 
 interface Crossing {
