@@ -9,6 +9,19 @@ import type { Design } from './schema';
 
 const lengthOf = (text: string) => valueOf(text, 'length');
 
+/** What of a mount does not enclose a rod that reaches so far from its axis, m. */
+function mountFaults(shape: Design['mount']['shape'], reach: number): Fault[] {
+  if (shape.kind === 'none') return [];
+  const { kind, ...sizes } = shape;
+  return Object.entries(sizes).flatMap(([key, size]) => {
+    const needed = key === 'width' ? 2 * reach : reach;
+    if (lengthOf(size) > needed) return [];
+    const least = `${Number(convertTo(needed, 'mm', 'length').toPrecision(4))} mm`;
+    const sentence = `got "${size}", so that the ${kind} does not enclose the rod; it must be more than ${least}`;
+    return [faultAt(`mount.shape.${key}`, 'inconsistent', sentence)];
+  });
+}
+
 /** What must lie inside what: the pump in the rod, the rod in the mount. */
 function sectionFaults({ rod, pump, mount }: Design): Fault[] {
   const { section } = rod;
@@ -18,18 +31,11 @@ function sectionFaults({ rod, pump, mount }: Design): Fault[] {
     const sentence = `missing; a ${section.shape} section needs its ${key}, such as "3 mm"`;
     return [faultAt(`rod.section.${key}`, 'missing', sentence)];
   }
-  const faults: Fault[] = [];
   const half = lengthOf(size) / 2;
+  const faults = mountFaults(mount.shape, section.shape === 'round' ? half : half * Math.SQRT2);
   if (lengthOf(pump.radius) >= half) {
     const sentence = `got "${pump.radius}", which does not fit into the rod; it must be less than half its ${key} of "${size}"`;
-    faults.push(faultAt('pump.radius', 'inconsistent', sentence));
-  }
-  const { outerRadius } = mount.shape;
-  const reach = section.shape === 'round' ? half : half * Math.SQRT2;
-  if (lengthOf(outerRadius) <= reach) {
-    const least = `${Number(convertTo(reach, 'mm', 'length').toPrecision(4))} mm`;
-    const sentence = `got "${outerRadius}", which does not enclose the rod; it must be more than ${least}`;
-    faults.push(faultAt('mount.shape.outerRadius', 'inconsistent', sentence));
+    faults.unshift(faultAt('pump.radius', 'inconsistent', sentence));
   }
   return faults;
 }

@@ -131,13 +131,12 @@ function mountConstants({ mount }: Design, book: ConstantBook) {
   const material = findMountMaterial(mount.material)!;
   const contact = findInterface(mount.interface.kind)!;
   const conductivity = material.values.thermalConductivity;
+  const label = `Conductivity of ${material.name}`;
   return {
-    mountConductivity: book.take(
-      'mount.thermalConductivity',
-      conductivity,
-      undefined,
-      `Conductivity of ${material.name}`,
-    ),
+    mountConductivity:
+      mount.shape.kind === 'none'
+        ? null
+        : book.take('mount.thermalConductivity', conductivity, undefined, label),
     contactConductance: book.take(
       'mount.interface.conductance',
       contact.conductance,

@@ -1,45 +1,20 @@
 import type { Surroundings } from '../cooling';
 import { DesignError, type Warning } from '../errors';
-import { findInterface, findMountMaterial } from '../materials';
 import type { Limits } from './bounds';
 import type { Overrides } from './constants';
 import { valueOf } from './quantity-field';
 import { resolveCavity } from './resolve-cavity';
-import { chooseConstants, type ChosenConstants } from './resolve-constants';
+import { chooseConstants } from './resolve-constants';
 import { resolveCoolers } from './resolve-coolers';
+import { resolveMount } from './resolve-mount';
 import { resolveDiode, resolvePump } from './resolve-pump';
 import { resolveRod } from './resolve-rod';
-import type { ResolvedDesign, ResolvedMount } from './resolved';
+import type { ResolvedDesign } from './resolved';
 import type { Design } from './schema';
 
 /** How far a room may go below and above its present temperature where nothing is stated, K (common practice, no source). */
 const colderBy = 7;
 const hotterBy = 8;
-
-function resolveMount(
-  { mount }: Design,
-  perimeterRatio: number,
-  values: ChosenConstants,
-): { mount: ResolvedMount; warnings: Warning[] } {
-  const material = findMountMaterial(mount.material)!;
-  const contact = findInterface(mount.interface.kind)!;
-  const cautions = [material.caution, contact.caution].filter((caution) => caution !== undefined);
-  const clash = contact.incompatible?.includes(material.name) ?? false;
-  const text = `The interface "${contact.name}" attacks ${material.name}; choose another of the two.`;
-  return {
-    warnings: clash ? [{ where: 'mount.interface.kind', text }] : [],
-    mount: {
-      name: material.name,
-      conductivity: values.mountConductivity,
-      outerRadius: valueOf(mount.shape.outerRadius, 'length'),
-      contactConductance: values.contactConductance * perimeterRatio,
-      baseResistance: valueOf(mount.baseResistance, 'thermalResistance'),
-      expansion: material.values.expansion.nominal,
-      density: material.values.density.nominal,
-      ...(cautions.length > 0 ? { caution: cautions.join('; ') } : {}),
-    },
-  };
-}
 
 function resolveLimits({ limits, pump }: Design, ambient: number, fractureStrength: number): Limits {
   return {
@@ -98,7 +73,7 @@ export function resolve(design: Design, overrides: Overrides = {}): ResolvedDesi
   const choice = chooseConstants(design, overrides);
   if (choice.missing.length > 0) throw new DesignError(choice.missing);
   const { rod, warnings: ofRod } = resolveRod(design, choice);
-  const { mount, warnings: ofMount } = resolveMount(design, rod.perimeterRatio, choice.values);
+  const { mount, warnings: ofMount } = resolveMount(design, rod, choice.values);
   const { warnings: ofRoom, ...room } = resolveRoom(design);
   const pump = resolvePump(design, choice.crystal);
   const limits = resolveLimits(design, room.surroundings.ambient, choice.values.fractureStrength);

@@ -101,15 +101,29 @@ export interface ResolvedLaser {
   thermal: { ground: number[]; lower: number; upper: number[]; start: number } | null;
 }
 
-export interface ResolvedMount {
-  name: string;
+/** The body that holds the rod, as the ring it is computed as. */
+export interface MountBody {
+  shape: 'ring' | 'block';
   conductivity: number;
+  /** m. */
   outerRadius: number;
+  /** 2 pi k times the resistance per length from the ring to the base; 0: the ring's outer surface is the base. */
+  beyondRing: number;
+  /** Cross-section without the bore, m2. */
+  sectionArea: number;
+  density: number;
+}
+
+export interface ResolvedMount {
+  /** Of the material; "no mount" where there is none. */
+  name: string;
+  /** null: the barrel itself is cooled. */
+  body: MountBody | null;
   /** Contact conductance per area of the equivalent round barrel, W/(m2 K). */
   contactConductance: number;
   baseResistance: number;
+  /** null where it is not known or there is no mount. */
   expansion: number | null;
-  density: number;
   caution?: string;
 }
 

@@ -1,5 +1,5 @@
 import * as v from 'valibot';
-import { crystals, interfaces, mountMaterials } from '../materials';
+import { crystals } from '../materials';
 import { length, positiveShare, share, wavelength } from './field-kinds';
 import { given, type FieldNote } from './field-note';
 import { catalogueName, choice, plainNumber, quantity, type AlternativesNote } from './quantity-field';
@@ -216,46 +216,4 @@ export const rodSchema = v.strictObject({
     '10 W/(m^2 K)',
   ),
   values: v.optional(valuesSchema, {}),
-});
-
-export const mountSchema = v.strictObject({
-  material: catalogueName('Mount material', mountMaterials, 'From the catalogue'),
-  shape: v.optional(
-    v.strictObject({
-      kind: v.optional(
-        choice('Mount shape', ['ring'], 'A body around the rod, cooled on its outside'),
-        'ring',
-      ),
-      outerRadius: length('Outer radius', 0.1, 1000, 'Where the mount meets the base; not the diameter', {
-        example: '12 mm',
-      }),
-    }),
-    { kind: 'ring', outerRadius: '12 mm' },
-  ),
-  interface: v.optional(
-    v.strictObject({
-      kind: catalogueName('Interface', interfaces, 'Between rod and mount, from the catalogue'),
-      conductance: v.optional(
-        quantity(
-          'heatTransferCoefficient',
-          'Contact conductance',
-          { above: 0, to: 1e7 },
-          {
-            hint: 'Per area of the barrel, both contact faces together',
-            empty: 'the value of the catalogue',
-          },
-        ),
-      ),
-    }),
-    { kind: 'indium foil' },
-  ),
-  baseResistance: v.optional(
-    quantity(
-      'thermalResistance',
-      'Mount to base',
-      { from: 0, to: 100 },
-      { hint: 'Joint between the mount and the cooler' },
-    ),
-    '0 K/W',
-  ),
 });

@@ -50,6 +50,12 @@ export const defaultOf = (schema: AnySchema): unknown =>
 export const isChoiceOfShapes = (schema: AnySchema): boolean =>
   schema.type === 'variant' || schema.type === 'union';
 
+/** Whether a group has the kind of a shape of a variant; one whose kind may be left out has it when none is given. */
+function isOfKind({ entries }: AnySchema, value: Record<string, unknown>): boolean {
+  const kind = entries!.kind!;
+  return unwrapped(kind).literal === (under(value, 'kind') ?? defaultOf(kind));
+}
+
 /**
  * Place of the shape a value has among the options of a union or variant: the same word, or a group of the same kind.
  * @returns -1 where the value has none of the shapes
@@ -58,7 +64,7 @@ export function shapePlace(schema: AnySchema, value: unknown): number {
   return schema.options!.findIndex((option) => {
     if (!option.entries) return option.literal === value;
     if (!isGroup(value)) return false;
-    return schema.type !== 'variant' || option.entries.kind!.literal === under(value, 'kind');
+    return schema.type !== 'variant' || isOfKind(option, value);
   });
 }
 

@@ -3,9 +3,10 @@ import { cavitySchema } from './cavity-schema';
 import { coolerSchema } from './cooler-schema';
 import { positiveShare } from './field-kinds';
 import { given } from './field-note';
+import { mountSchema } from './mount-schema';
 import { pumpSchema, surroundingsSchema } from './pump-schema';
 import { plainNumber, quantity, text } from './quantity-field';
-import { mountSchema, rodSchema } from './rod-schema';
+import { rodSchema } from './rod-schema';
 
 /**
  * The design file: everything a person enters. Quantities are text with a unit; the ranges are those outside which a

@@ -39,6 +39,24 @@ export function blockResistance(block: BlockMount): number {
 }
 
 /**
+ * The ring a block is computed as: no larger than the block's own cross-section, so that it carries no more heat along
+ * the rod than the block does; what it lacks in resistance lies between it and the base.
+ * @returns `outerRadius` in m; `beyondRing`: 2 pi k times the resistance per length from the ring to the base, 0 or more
+ */
+export function ringOfBlock(block: Omit<BlockMount, 'conductivity'>): {
+  outerRadius: number;
+  beyondRing: number;
+} {
+  const { boreRadius, width, depth, cover } = block;
+  const whole = 2 * Math.PI * blockResistance({ ...block, conductivity: 1 });
+  const inRing = Math.log(Math.sqrt((width * (depth + cover)) / Math.PI) / boreRadius);
+  return {
+    outerRadius: boreRadius * Math.exp(Math.min(inRing, whole)),
+    beyondRing: Math.max(0, whole - inRing),
+  };
+}
+
+/**
  * Outer radius of the ring that resists as much as the block, so that a block can be computed as a ring with a fixed
  * outer surface: b = a exp(2 pi k R').
  * @returns m

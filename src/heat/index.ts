@@ -1,5 +1,5 @@
 export { type RodConduction, assembleRod } from './assemble';
-export { type BlockMount, blockResistance, equivalentRingRadius } from './block-mount';
+export { type BlockMount, blockResistance, equivalentRingRadius, ringOfBlock } from './block-mount';
 export { type ConductivityLaw, potentialOf, temperatureOf, temperatureSlope } from './conductivity-law';
 export { type RodField, barrelFlux } from './field';
 export { type GridError, estimateGridError } from './grid-error';

@@ -39,7 +39,8 @@ export function ledgerOf(
   separate: CoolerState | null,
   input: LedgerInput,
 ): Flow[] {
-  const { pump } = prepared.resolved;
+  const { pump, mount } = prepared.resolved;
+  const holder = mount.body ? 'mount' : 'barrel';
   const arriving = input.pumpPower * pump.entranceTransmission;
   const clipped = arriving * prepared.pump.clipped;
   const stimulated = loop.absorbedPower * loop.split.stimulated;
@@ -48,15 +49,15 @@ export function ledgerOf(
     ...diodeFlows(prepared, input.diodeHeat, separate),
     { from: 'diode', to: 'pump light', power: input.pumpPower },
     { from: 'pump light', to: 'coupling loss', power: input.pumpPower - arriving },
-    { from: 'pump light', to: 'mount', power: clipped },
+    { from: 'pump light', to: holder, power: clipped },
     { from: 'pump light', to: 'residual pump', power: loop.enteringPower - loop.absorbedPower },
     { from: 'pump light', to: 'rod', power: loop.absorbedPower },
     { from: 'rod', to: 'laser output', power: input.outputPower },
     { from: 'rod', to: 'cavity loss', power: stimulated - input.outputPower },
     { from: 'rod', to: 'fluorescence', power: loop.absorbedPower * loop.split.fluorescence },
-    { from: 'rod', to: 'mount', power: loop.mountHeat },
+    { from: 'rod', to: holder, power: loop.mountHeat },
     { from: 'rod', to: 'air at the faces', power: input.toAir },
-    { from: 'mount', to: 'base', power: loop.mountHeat + clipped },
+    { from: holder, to: 'base', power: loop.mountHeat + clipped },
     ...cooler.flows,
   ];
   return flows.filter((item) => item.power !== 0).map(upright);

@@ -1,13 +1,15 @@
 import { prepareCavity, type PreparedCavity } from '../cavity';
-import type { ResolvedDesign } from '../design/resolved';
+import type { ResolvedDesign, ResolvedMount } from '../design/resolved';
 import {
   assembleRod,
   makeRodGrid,
   solveRod,
+  type ContactModel,
   type GridWish,
   type RodConduction,
   type RodGrid,
   type RodHeatModel,
+  type SideModel,
 } from '../heat';
 import { combineRings, overlapFaces } from '../laser';
 import {
@@ -64,6 +66,17 @@ export interface PreparedDesign {
   cavity: PreparedCavity;
 }
 
+/** The barrel's way to the base: through the mount, or directly where there is none. */
+function sideOf({ body, contactConductance }: ResolvedMount): SideModel {
+  if (!body) return { kind: 'contact', conductance: contactConductance };
+  const { conductivity, outerRadius, beyondRing } = body;
+  const outer: ContactModel =
+    beyondRing > 0
+      ? { kind: 'contact', conductance: conductivity / (outerRadius * beyondRing) }
+      : { kind: 'fixed' };
+  return { kind: 'ring', contactConductance, conductivity, outerRadius, outer };
+}
+
 function heatModel({ rod, mount }: ResolvedDesign): RodHeatModel {
   const end =
     rod.faceFilm > 0 ? { kind: 'film' as const, coefficient: rod.faceFilm } : { kind: 'insulated' as const };
@@ -75,13 +88,7 @@ function heatModel({ rod, mount }: ResolvedDesign): RodHeatModel {
     conductivityRadial: rod.conductivityRadial,
     conductivityAxial: rod.conductivityAxial,
     conductivityExponent: rod.conductivityExponent,
-    side: {
-      kind: 'ring',
-      contactConductance: mount.contactConductance,
-      conductivity: mount.conductivity,
-      outerRadius: mount.outerRadius,
-      outer: { kind: 'fixed' },
-    },
+    side: sideOf(mount),
     front: end,
     back: end,
   };

@@ -8,7 +8,7 @@ const profilePoints = 81;
 
 function rodPicture(prepared: PreparedDesign, { field }: SolvedPoint): RodPicture {
   const { grid, temperatures, peakPosition } = field;
-  const { rod, pump } = prepared.resolved;
+  const { rod, pump, mount } = prepared.resolved;
   const length = grid.axialFaces[grid.nz]!;
   const along = (end: number) =>
     Float64Array.from({ length: profilePoints }, (_, k) => (end * k) / (profilePoints - 1));
@@ -25,6 +25,7 @@ function rodPicture(prepared: PreparedDesign, { field }: SolvedPoint): RodPictur
     lowest,
     highest: field.peakTemperature,
     rodRadius: rod.radius,
+    mount: { name: mount.name, shape: mount.body?.shape ?? 'none' },
     pumpRadius: pump.radius,
     frontCap: rod.frontCap,
     backCap: rod.backCap,

@@ -108,7 +108,7 @@ function mountRows(report: Report): string[][] {
       mount.setBy ?? '-',
       celsius(mount.peakTemperature),
       `${number(mount.dioptricPower, 4)} /m`,
-      `${number(mount.mass * 1e3, 3)} g`,
+      mount.thermalConductivity === null ? '-' : `${number(mount.mass * 1e3, 3)} g`,
     ]),
   ];
 }

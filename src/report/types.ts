@@ -46,8 +46,10 @@ export interface MountReport {
   dioptricPower: number;
   /** Mount minus rod expansion across the rod, 1/K; null where the expansion is unknown. */
   expansionMismatch: number | null;
+  /** kg, as long as the rod; 0 without a mount. */
   mass: number;
-  thermalConductivity: number;
+  /** W/(m K); null where there is no mount. */
+  thermalConductivity: number | null;
   caution?: string;
   current: boolean;
 }
@@ -130,6 +132,8 @@ export interface RodPicture {
   lowest: number;
   highest: number;
   rodRadius: number;
+  /** What holds the rod; a block is drawn as the ring it is computed as. */
+  mount: { name: string; shape: 'ring' | 'block' | 'none' };
   pumpRadius: number;
   frontCap: number;
   backCap: number;

@@ -1,5 +1,5 @@
 import { findMountMaterial, type MountMaterial } from '../materials';
-import type { ResolvedDesign } from '../design/resolved';
+import type { MountBody, ResolvedDesign } from '../design/resolved';
 import type { LimitName } from '../limits/types';
 import { worstOf } from '../limits/margins';
 import { prepareDesign } from '../operating/prepare';
@@ -27,14 +27,15 @@ export interface MountComparison {
   dioptricPower: number;
   /** Mount minus rod, across the rod, 1/K. */
   expansionMismatch: number | null;
-  /** Of a ring as long as the rod, kg. */
+  /** Of a mount as long as the rod, kg; 0 without one. */
   mass: number;
-  thermalConductivity: number;
+  /** null where there is no mount: the barrel itself is cooled. */
+  thermalConductivity: number | null;
   caution?: string;
   current: boolean;
 }
 
-function withMount(resolved: ResolvedDesign, material: MountMaterial): ResolvedDesign {
+function withMount(resolved: ResolvedDesign, body: MountBody, material: MountMaterial): ResolvedDesign {
   const { thermalConductivity, expansion, density } = material.values;
   const { caution } = material;
   return {
@@ -42,10 +43,9 @@ function withMount(resolved: ResolvedDesign, material: MountMaterial): ResolvedD
     mount: {
       ...resolved.mount,
       name: material.name,
-      conductivity: thermalConductivity.nominal,
+      body: { ...body, conductivity: thermalConductivity.nominal, density: density.nominal },
       expansion: expansion.nominal,
-      density: density.nominal,
-      ...(caution ? { caution } : {}),
+      caution,
     },
   };
 }
@@ -75,15 +75,16 @@ function compare(bench: OptionBench, current: boolean, { pumpPower, setBy }: Cei
     peakTemperature: point.rod.peakTemperature,
     dioptricPower: point.lens.dioptricPower,
     expansionMismatch: mount.expansion === null ? null : mount.expansion - rod.expansionAcross,
-    mass: mount.density * length * (Math.PI * mount.outerRadius ** 2 - rod.sectionArea),
-    thermalConductivity: mount.conductivity,
+    mass: mount.body ? mount.body.density * length * mount.body.sectionArea : 0,
+    thermalConductivity: mount.body?.conductivity ?? null,
     ...(mount.caution ? { caution: mount.caution } : {}),
     current,
   };
 }
 
 /**
- * The same design in every mount material, with the design's chosen cooler; one material at a time.
+ * The same design in every mount material, with the design's chosen cooler; one material at a time. Without a mount there is
+ * nothing to compare: the one row says what holds without it.
  * @param bench of the design as it stands
  * @param known its ceiling
  * @param edges powers near which the cavity gains or loses stability, W
@@ -94,12 +95,14 @@ export function* compareMounts(
   edges: readonly number[],
 ): Generator<MountComparison> {
   const { prepared, cooler } = bench;
+  const { body, name: own } = prepared.resolved.mount;
   yield compare(bench, true, known);
+  if (!body) return;
   for (const name of comparedMounts) {
     const material = findMountMaterial(name)!;
-    if (material.name === prepared.resolved.mount.name) continue;
+    if (material.name === own) continue;
     const other = new OptionBench(
-      prepareDesign(withMount(prepared.resolved, material), 'standard', prepared),
+      prepareDesign(withMount(prepared.resolved, body, material), 'standard', prepared),
       cooler,
     );
     yield compare(other, false, ceilingNear(other, known, edges));

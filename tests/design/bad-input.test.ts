@@ -139,6 +139,11 @@ describe('the messages', () => {
       '5 deg',
       'cavity.elements.0.mirror.incidence: got "5 deg"; an end mirror of a linear cavity is met at 0 deg',
     ],
+    [
+      'mount.shape.kind',
+      'cube',
+      'mount.shape.kind: got "cube"; a mount\'s kind is "ring", "block" or "none"',
+    ],
     ['chosenCooler', 'fun', 'chosenCooler: got "fun"; did you mean "fan"? known are fan, loop, tec, plain'],
     [
       'coolers.2.hotSide',
@@ -215,6 +220,9 @@ describe('what must fit together', () => {
   test.each([
     ['pump.radius', '1.5 mm', 'pump.radius'],
     ['mount.shape.outerRadius', '2.1 mm', 'mount.shape.outerRadius'],
+    ['mount.shape', { kind: 'block', width: '4.2 mm', depth: '9 mm', cover: '9 mm' }, 'mount.shape.width'],
+    ['mount.shape', { kind: 'block', width: '9 mm', depth: '2 mm', cover: '9 mm' }, 'mount.shape.depth'],
+    ['mount.shape', { kind: 'block', width: '9 mm', depth: '9 mm', cover: '2 mm' }, 'mount.shape.cover'],
     ['pump.powerRange', ['5 W', '5 W'], 'pump.powerRange'],
     ['coolers.0.sink.finCount', 100, 'coolers.0.sink.finCount'],
     ['coolers.1.id', 'fan', 'coolers.1.id'],

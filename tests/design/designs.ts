@@ -73,6 +73,14 @@ export const vanadate: DesignInput = {
   uncertainty: { 'pump.radius': '5 %', 'mount.interface.conductance': '30 %' },
 };
 
+/** The vanadate rod held in a block. */
+export const blockMounted: DesignInput = {
+  ...vanadate,
+  title: 'Vanadate in a block',
+  mount: { ...vanadate.mount, shape: { kind: 'block', width: '30 mm', depth: '10 mm', cover: '8 mm' } },
+  uncertainty: {},
+};
+
 /** A design that must be in order. */
 export function checked(input: unknown): Design {
   const found = checkDesign(input);
@@ -95,4 +103,5 @@ export function vanadateWith(changes: Record<string, unknown>): Design {
 export const inputs: [string, DesignInput][] = [
   ['the demo design', demoDesign],
   ['the vanadate design', vanadate],
+  ['the block-mounted design', blockMounted],
 ];

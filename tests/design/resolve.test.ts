@@ -44,7 +44,7 @@ describe('a resolved design holds SI numbers: ', () => {
     ['back cap', rod.backCap, 0],
     ['face film', rod.faceFilm, 10],
     ['section area', rod.sectionArea, 9e-6],
-    ['mount radius', mount.outerRadius, 12e-3],
+    ['mount radius', mount.body!.outerRadius, 12e-3],
     ['mount to base', mount.baseResistance, 0],
     ['passive loss', cavity.passiveLoss, 0.01],
     ['output coupling', cavity.outputCoupling, 0.05],

@@ -43,6 +43,14 @@ export function movedProbe(event: KeyboardEvent, place: Probe, view: RodView): P
   };
 }
 
+/** What the section shows, in words. */
+export const mountWords = ({ mount }: RodPicture): string =>
+  ({
+    ring: 'rod and mount',
+    block: 'rod and block mount, the block as the ring it is computed as',
+    none: 'the rod, which has no mount',
+  })[mount.shape];
+
 export function rodView(picture: RodPicture, width: number, height: number, wholeMount: boolean): RodView {
   const length = picture.axialFaces.at(-1) ?? 1;
   const outer = picture.radialFaces.at(-1) ?? 1;

@@ -49,6 +49,8 @@ export function rodSentence(report: Report): string {
 const spreadOf = (values: number[]) => Math.max(...values) - Math.min(...values);
 
 export function mountSentence(mounts: MountReport[]): string {
+  if (mounts.length === 1 && mounts[0]!.thermalConductivity === null)
+    return 'None conducts here: the barrel itself is cooled, and the contact to it is all that lies between rod and base.';
   if (mounts.length < 2) return 'No other material was compared.';
   const lens = mounts.map((mount) => mount.dioptricPower);
   const middle = Math.abs(lens.reduce((sum, value) => sum + value, 0) / lens.length);
