@@ -148,6 +148,12 @@ export const pumpSchema = v.strictObject({
     share('Return reflectivity', 'Of the mirror that sends the pump back'),
     '95 %',
   ),
+  backShare: v.optional(
+    share('Share from the back', 'Of the light, that enters at the far face: 50 % pumps both ends alike', {
+      example: '50 %',
+    }),
+    '0 %',
+  ),
   entranceTransmission: v.optional(
     share('Entrance transmission', 'Of coupling optics and entrance face together'),
     '99 %',

@@ -42,6 +42,7 @@ export function resolvePump(design: Design, crystal: Crystal): ResolvedPump {
     waistPosition: valueOf(pump.waistPosition, 'length'),
     polarisationShares: polarisationShares(crystal, design),
     passes: pump.passes === 2 ? 2 : 1,
+    backShare: valueOf(pump.backShare, 'dimensionless'),
     returnReflectivity: valueOf(pump.returnReflectivity, 'dimensionless'),
     entranceTransmission: valueOf(pump.entranceTransmission, 'dimensionless'),
   };

@@ -42,6 +42,8 @@ export interface ResolvedPump {
   waistPosition: number;
   polarisationShares: { pi: number; sigma: number };
   passes: 1 | 2;
+  /** Share of the light that enters at the far face, 0..1. */
+  backShare: number;
   returnReflectivity: number;
   entranceTransmission: number;
 }

@@ -17,7 +17,8 @@ export function depositAt(
   const deposit = new Float64Array(grid.nz);
   const doped = deposit.subarray(grid.dopedFrom, grid.dopedTo);
   const faces = grid.axialFaces.subarray(grid.dopedFrom, grid.dopedTo + 1);
-  axialDeposit(channelsAt(absorption, wavelength), faces, pump.passes, pump.returnReflectivity, doped);
+  const channels = channelsAt(absorption, wavelength);
+  axialDeposit(channels, faces, pump.passes, pump.returnReflectivity, doped, pump.backShare);
   return deposit;
 }
 

@@ -196,7 +196,7 @@ export function prepareDesign(
     pumpRadius: Math.min(narrowest, 0.9 * rod.radius),
     absorptionCoefficient: strongest,
     cells,
-    bothEnds: pump.passes === 2,
+    bothEnds: pump.passes === 2 || pump.backShare > 0,
   });
   const linear = assembleRod({ ...model, conductivityExponent: 0 }, grid);
   const conduction = rod.conductivityExponent === 0 ? linear : assembleRod(model, grid);

@@ -27,6 +27,7 @@ function rodPicture(prepared: PreparedDesign, { field }: SolvedPoint): RodPictur
     rodRadius: rod.radius,
     mount: { name: mount.name, shape: mount.body?.shape ?? 'none' },
     pumpRadius: pump.radius,
+    backShare: pump.backShare,
     frontCap: rod.frontCap,
     backCap: rod.backCap,
     radialProfile: {

@@ -135,6 +135,8 @@ export interface RodPicture {
   /** What holds the rod; a block is drawn as the ring it is computed as. */
   mount: { name: string; shape: 'ring' | 'block' | 'none' };
   pumpRadius: number;
+  /** Share of the pump light that enters at the back face. */
+  backShare: number;
   frontCap: number;
   backCap: number;
   /** Profiles: temperature against r at the hottest plane, and against z on the axis. */

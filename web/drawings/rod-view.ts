@@ -43,6 +43,12 @@ export function movedProbe(event: KeyboardEvent, place: Probe, view: RodView): P
   };
 }
 
+/** Where the pump light enters the section as it is drawn, front face left. */
+export function pumpEntry({ backShare }: RodPicture): string {
+  if (backShare === 0) return 'from the left';
+  return backShare === 1 ? 'from the right' : 'from both sides';
+}
+
 /** What the section shows, in words. */
 export const mountWords = ({ mount }: RodPicture): string =>
   ({

@@ -37,7 +37,7 @@ function unsteady({ state, reason, pumpPower }: Report['operating']): string {
 export function rodSentence(report: Report): string {
   const { rod, heatLoad } = report.operating;
   const deep = rod.peakPosition.z > 5e-5;
-  const place = deep ? `${length(rod.peakPosition.z)} behind the pumped face` : 'at the pumped face';
+  const place = deep ? `${length(rod.peakPosition.z)} behind the front face` : 'at the front face';
   const hotter = report.blocked.rod.peakTemperature - rod.peakTemperature;
   const blocked =
     Math.abs(hotter) < 0.05
