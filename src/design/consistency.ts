@@ -11,6 +11,7 @@ import { cavityFaults } from './consistency-cavity';
 import { coolerFaults } from './consistency-coolers';
 import { rodFaults } from './consistency-rod';
 import { faultAt, unknownName } from './fault';
+import { tableFaults } from './measured-profile';
 import { valueOf } from './quantity-field';
 import { chooseConstants } from './resolve-constants';
 import type { Design } from './schema';
@@ -32,9 +33,10 @@ function mountFaults({ mount }: Design): Fault[] {
   return faults;
 }
 
-function pumpFaults({ pump, rod }: Design): Fault[] {
+function pumpFaults(design: Design): Fault[] {
+  const { pump, rod } = design;
   const { powerRange, polarisation } = pump;
-  const faults: Fault[] = [];
+  const faults = tableFaults(design);
   if (powerRange && valueOf(powerRange[0], 'power') >= valueOf(powerRange[1], 'power')) {
     const sentence = `got "${powerRange[0]}" to "${powerRange[1]}"; the first must be less than the second`;
     faults.push(faultAt('pump.powerRange', 'inconsistent', sentence));

@@ -97,6 +97,40 @@ const lightSchema = {
   ),
 };
 
+const notATable = (got: unknown) =>
+  `wrong type|got ${given(got)}; a list of pairs is needed, such as [["0 um", 1], ["50 um", 0.9]]`;
+const fewestPoints = 3;
+const mostPoints = 2000;
+
+/** A measured radial profile: pairs of radius and intensity. */
+const profileTable = v.pipe(
+  v.array(
+    v.strictTuple(
+      [
+        length('Radius of a point', 0, 50, 'From the axis of the beam; rising from 0', {
+          unit: 'um',
+          example: '50 um',
+        }),
+        plainNumber(
+          'Intensity at that radius',
+          { from: 0, to: 1e12 },
+          'In any unit; straight between points, none beyond the last',
+        ),
+      ],
+      (issue) => notATable(issue.input),
+    ),
+    (issue) => notATable(issue.input),
+  ),
+  v.minLength(
+    fewestPoints,
+    (issue) => `inconsistent|got ${given(issue.input)}; at least ${fewestPoints} points are needed`,
+  ),
+  v.maxLength(
+    mostPoints,
+    (issue) => `out of range|got ${given(issue.input)}; at most ${mostPoints} points are allowed`,
+  ),
+);
+
 const beamSchema = {
   radius: quantity(
     'length',
@@ -105,13 +139,14 @@ const beamSchema = {
     {
       unit: 'um',
       example: '200 um',
-      hint: 'Gaussian: 1/e² radius of intensity; flat-top: radius of the edge. Not the diameter',
+      hint: 'Gaussian: 1/e² radius of intensity; flat-top: radius of the edge; table: holds 86.5 % of the power. Not the diameter',
     },
   ),
   profile: v.optional(
-    choice('Profile', ['gaussian', 'flat-top', 'super-gaussian'], 'Of intensity across the beam'),
+    choice('Profile', ['gaussian', 'flat-top', 'super-gaussian', 'table'], 'Of intensity across the beam'),
     'gaussian',
   ),
+  profileTable: v.optional(profileTable),
   profileOrder: v.optional(
     plainNumber('Super-Gaussian order', { from: 1, to: 40 }, 'p of exp(-2 (r/w)^2p); 1 is the Gaussian'),
     3,

@@ -1,4 +1,6 @@
 import type { Crystal } from '../materials';
+import type { BeamProfile } from '../pump';
+import { measuredProfile } from './measured-profile';
 import { valueOf } from './quantity-field';
 import type { ResolvedDiode, ResolvedPump } from './resolved';
 import type { Design } from './schema';
@@ -24,10 +26,14 @@ export function polarisationShares(crystal: Crystal, { rod, pump }: Design): { p
   return pump.polarisation === 'pi' ? { pi: 1, sigma: 0 } : { pi: 0, sigma: 1 };
 }
 
+function profileOf({ pump: { profile, profileOrder, profileTable } }: Design): BeamProfile {
+  if (profile === 'table') return measuredProfile(profileTable!);
+  return profile === 'super-gaussian' ? { kind: profile, order: profileOrder } : { kind: profile };
+}
+
 /** The pump light of a design in SI. */
 export function resolvePump(design: Design, crystal: Crystal): ResolvedPump {
   const { pump } = design;
-  const { profile, profileOrder } = pump;
   const power = valueOf(pump.power, 'power');
   return {
     power,
@@ -37,7 +43,7 @@ export function resolvePump(design: Design, crystal: Crystal): ResolvedPump {
     drift: valueOf(pump.wavelengthDrift, 'wavelengthDrift'),
     linewidth: valueOf(pump.linewidth, 'length'),
     radius: valueOf(pump.radius, 'length'),
-    profile: profile === 'super-gaussian' ? { kind: profile, order: profileOrder } : { kind: profile },
+    profile: profileOf(design),
     beamQuality: pump.beamQuality ?? null,
     waistPosition: valueOf(pump.waistPosition, 'length'),
     polarisationShares: polarisationShares(crystal, design),

@@ -2,6 +2,7 @@ import type { Surroundings } from '../cooling';
 import { DesignError, type Warning } from '../errors';
 import type { Limits } from './bounds';
 import type { Overrides } from './constants';
+import { stretchWarning } from './measured-profile';
 import { valueOf } from './quantity-field';
 import { resolveCavity } from './resolve-cavity';
 import { chooseConstants } from './resolve-constants';
@@ -89,6 +90,6 @@ export function resolve(design: Design, overrides: Overrides = {}): ResolvedDesi
     cavity: resolveCavity(design, pump.radius),
     limits,
     constants: choice.used,
-    warnings: [...ofRod, ...ofMount, ...ofRoom],
+    warnings: [...ofRod, ...ofMount, ...stretchWarning(design, pump.profile), ...ofRoom],
   };
 }

@@ -34,7 +34,7 @@ export interface ResolvedPump {
   drift: number;
   /** Full width at half maximum, m. */
   linewidth: number;
-  /** Waist radius in the rod: 1/e2 of a Gaussian, edge of a flat-top, m. */
+  /** Waist radius in the rod: 1/e2 of a Gaussian, edge of a flat-top, 86.5 % of the power of a table, m. */
   radius: number;
   profile: BeamProfile;
   /** null: collimated inside the rod. */

@@ -6,7 +6,7 @@ export const longestDesign = 250_000;
 /** What no design comes near; beyond it a file is refused before anything is made of it. */
 const deepest = 12;
 const mostValues = 20_000;
-const mostInOne = 1_000;
+const mostInOne = 2_000;
 const longestText = 20_000;
 const longestKey = 100;
 

@@ -224,6 +224,62 @@ describe('what must fit together', () => {
     ['mount.shape', { kind: 'block', width: '9 mm', depth: '2 mm', cover: '9 mm' }, 'mount.shape.depth'],
     ['mount.shape', { kind: 'block', width: '9 mm', depth: '9 mm', cover: '2 mm' }, 'mount.shape.cover'],
     ['pump.powerRange', ['5 W', '5 W'], 'pump.powerRange'],
+    ['pump.profile', 'table', 'pump.profileTable'],
+    [
+      'pump.profileTable',
+      [
+        ['10 um', 1],
+        ['20 um', 1],
+        ['30 um', 0],
+      ],
+      'pump.profileTable.0.0',
+    ],
+    [
+      'pump.profileTable',
+      [
+        ['0 um', 1],
+        ['30 um', 1],
+        ['30 um', 0],
+      ],
+      'pump.profileTable.2.0',
+    ],
+    [
+      'pump.profileTable',
+      [
+        ['0 um', 0],
+        ['20 um', 0],
+        ['30 um', 0],
+      ],
+      'pump.profileTable',
+    ],
+    [
+      'pump.profileTable',
+      [
+        ['0 um', 1],
+        ['20 um', 0],
+      ],
+      'pump.profileTable',
+    ],
+    [
+      'pump.profileTable',
+      [
+        ['0 um', 1],
+        ['20 um', -1],
+        ['30 um', 0],
+      ],
+      'pump.profileTable.1.1',
+    ],
+    [
+      'pump.profileTable',
+      [
+        ['0 um', 1],
+        ['20 um', 1, 2],
+        ['30 um', 0],
+      ],
+      'pump.profileTable.1.2',
+    ],
+    ['pump.profileTable', 'profile.csv', 'pump.profileTable'],
+    ['pump.profileTable', Array.from({ length: 2001 }, (_, k) => [`${k} um`, 1]), 'pump.profileTable'],
     ['coolers.0.sink.finCount', 100, 'coolers.0.sink.finCount'],
     ['coolers.1.id', 'fan', 'coolers.1.id'],
     ['cavity.elements.1', { space: '1 mm' }, 'cavity.elements'],

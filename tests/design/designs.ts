@@ -73,10 +73,21 @@ export const vanadate: DesignInput = {
   uncertainty: { 'pump.radius': '5 %', 'mount.interface.conductance': '30 %' },
 };
 
-/** The vanadate rod held in a block. */
+/** The vanadate rod held in a block, with a measured pump profile. */
 export const blockMounted: DesignInput = {
   ...vanadate,
   title: 'Vanadate in a block',
+  pump: {
+    ...vanadate.pump,
+    radius: '220 um',
+    profile: 'table',
+    profileTable: [
+      ['0 um', 1],
+      ['100 um', 0.9],
+      ['0.2 mm', 0.4],
+      ['300 um', 0],
+    ],
+  },
   mount: { ...vanadate.mount, shape: { kind: 'block', width: '30 mm', depth: '10 mm', cover: '8 mm' } },
   uncertainty: {},
 };

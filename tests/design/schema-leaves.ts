@@ -57,4 +57,5 @@ export function schemaChoices(
   ];
 }
 
-export const pattern = (path: string): string => path.replace(/^(coolers|cavity\.elements)\.\d+/, '$1.*');
+export const pattern = (path: string): string =>
+  path.replace(/^(coolers|cavity\.elements|pump\.profileTable)\.\d+/, '$1.*');

@@ -2,6 +2,7 @@ import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import { AskPolicy } from '../../web/state/ask-policy';
 import { beginHistory, record, redone, undone } from '../../web/state/history';
 import { niceTicks, pumpAxis } from '../../web/state/pump-axis';
+import { profileText, readProfile } from '../../web/state/profile-text';
 import { steppedText } from '../../web/state/step-text';
 
 describe('stepping the number of a quantity', () => {
@@ -96,5 +97,52 @@ describe('the pump axis', () => {
   test('no place lies outside the drawing', () => {
     const axis = pumpAxis(20);
     expect([axis.at(-5), axis.at(10), axis.at(50)]).toEqual([0, 50, 100]);
+  });
+});
+
+describe('a measured profile typed or pasted', () => {
+  test.each([
+    [
+      '0 um, 1\n50 um, 0.9',
+      [
+        ['0 um', 1],
+        ['50 um', 0.9],
+      ],
+    ],
+    [
+      '0;1\n0.05 mm;9e-1\n\n',
+      [
+        ['0 um', 1],
+        ['0.05 mm', 0.9],
+      ],
+    ],
+    [
+      '0\t1\n50\t0.9',
+      [
+        ['0 um', 1],
+        ['50 um', 0.9],
+      ],
+    ],
+    [
+      '0 1\n50 um 0.9',
+      [
+        ['0 um', 1],
+        ['50 um', 0.9],
+      ],
+    ],
+  ])('%j is read as pairs', (text, pairs) => expect(readProfile(text)).toEqual(pairs));
+
+  test('what is no number is left for the check to name, and nothing at all is no table', () => {
+    expect(readProfile('0 um, bright')).toEqual([['0 um', 'bright']]);
+    expect(readProfile('50 um')).toEqual([['50 um', 'um']]);
+    expect(readProfile(' \n')).toBeUndefined();
+  });
+
+  test('is shown as it is read', () => {
+    const points: [string, number][] = [
+      ['0 um', 1],
+      ['0.3 mm', 0],
+    ];
+    expect(readProfile(profileText(points))).toEqual(points);
   });
 });

@@ -5,6 +5,7 @@ export type FieldPlace =
   | 'title'
   | 'pump'
   | 'pump light'
+  | 'measured profile'
   | 'diode'
   | 'surroundings'
   | 'rod'
@@ -19,6 +20,7 @@ const rules: [RegExp, FieldPlace][] = [
   [/^(title|notes|chosenCooler)$/, 'title'],
   [/^pump\.(power|powerRange.*)$/, 'pump'],
   [/^pump\.diode\./, 'diode'],
+  [/^pump\.profileTable/, 'measured profile'],
   [/^pump\./, 'pump light'],
   [/^surroundings\./, 'surroundings'],
   [/^rod\.values\./, 'constants'],
