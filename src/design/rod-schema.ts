@@ -215,5 +215,13 @@ export const rodSchema = v.strictObject({
     ),
     '10 W/(m^2 K)',
   ),
+  surfaceFinish: v.optional(
+    choice(
+      'Surface finish',
+      ['polished', 'ground', 'etched'],
+      'Rules the strength: ground takes the low end of its published range, etched the high end',
+    ),
+    'polished',
+  ),
   values: v.optional(valuesSchema, {}),
 });

@@ -5,7 +5,7 @@ import { demoDesign } from '../../src/design/demo';
 import { withValue } from '../../src/design/fields';
 import { resolve } from '../../src/design/resolve';
 import { uncertainFields } from '../../src/design/uncertain';
-import { absorptionLines, crystals } from '../../src/materials';
+import { absorptionLines, crystals, findCrystal } from '../../src/materials';
 import { checked, faultsOf, inputs, vanadate, vanadateWith } from './designs';
 
 /** Every line and cut of every crystal that the check lets through, absorbing in its own lines. */
@@ -78,6 +78,38 @@ describe('the constants an answer rests on', () => {
   test('take the conductivity across for that along, where only the first is entered', () => {
     const own = resolve(vanadateWith({ 'rod.values.thermalConductivityRadial': '6 W/(m K)' })).rod;
     expect([own.conductivityRadial, own.conductivityAxial]).toEqual([6, 6]);
+  });
+
+  test.each([
+    ['ground', 'low', /^low end of the range, for a ground surface/],
+    ['polished', 'nominal', /^(?!.*end of the range)/],
+    ['etched', 'high', /^high end of the range, for an? etched surface/],
+  ] as const)(
+    'take the %s strength at the %s value of its range, and keep the range',
+    (finish, end, note) => {
+      const { limits, constants } = resolve(
+        vanadateWith({
+          'rod.surfaceFinish': finish,
+          'rod.crystal': 'Nd:YAG',
+          'rod.dopantConcentration': '1 %',
+        }),
+      );
+      const sourced = findCrystal('Nd:YAG')!.values.fractureStrength!;
+      expect(limits.fractureStrength).toBe(sourced[end]);
+      const constant = constants.find(({ path }) => path === 'material.fractureStrength')!;
+      expect(constant).toMatchObject({ nominal: sourced[end], low: sourced.low, high: sourced.high });
+      expect(constant.note ?? '').toMatch(note);
+      // The published span of one garnet, 133 MPa ground to 530 MPa etched, holds every one of them; its lower end to 3 %.
+      expect(limits.fractureStrength).toBeGreaterThan(133e6 * 0.97);
+      expect(limits.fractureStrength).toBeLessThan(530e6);
+    },
+  );
+
+  test("take a strength of one's own whatever the finish", () => {
+    const own = resolve(
+      vanadateWith({ 'rod.surfaceFinish': 'ground', 'rod.values.fractureStrength': '90 MPa' }),
+    );
+    expect(own.limits.fractureStrength).toBeCloseTo(90e6, 3);
   });
 
   test('stand at another value where the band asks, and nothing else changes', () => {
