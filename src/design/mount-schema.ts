@@ -2,7 +2,7 @@ import * as v from 'valibot';
 import { interfaces, mountMaterials } from '../materials';
 import { length } from './field-kinds';
 import { given } from './field-note';
-import { catalogueName, quantity, type AlternativesNote } from './quantity-field';
+import { catalogueName, choice, quantity, type AlternativesNote } from './quantity-field';
 
 const ring = v.strictObject({
   kind: v.optional(v.literal('ring'), 'ring'),
@@ -62,6 +62,23 @@ export const mountSchema = v.strictObject({
       ),
     }),
     { kind: 'indium foil' },
+  ),
+  grip: v.optional(
+    choice(
+      'Grip on the barrel',
+      ['free', 'clamped'],
+      'Free: the barrel can widen; clamped: a rigid, slippery bore that fitted without force at ambient temperature',
+    ),
+    'free',
+  ),
+  clampingPressure: v.optional(
+    quantity(
+      'stress',
+      'Clamping pressure',
+      { from: 0, to: 1e9 },
+      { hint: 'Even over a free barrel; without effect on a clamped one', unit: 'MPa', example: '5 MPa' },
+    ),
+    '0 MPa',
   ),
   baseResistance: v.optional(
     quantity(

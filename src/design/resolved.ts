@@ -124,6 +124,10 @@ export interface ResolvedMount {
   /** Contact conductance per area of the equivalent round barrel, W/(m2 K). */
   contactConductance: number;
   baseResistance: number;
+  /** Clamped: a rigid, slippery bore that fitted without force at the ambient temperature. */
+  grip: 'free' | 'clamped';
+  /** Even pressure on a free barrel, Pa; 0 where it is clamped. */
+  clampingPressure: number;
   /** null where it is not known or there is no mount. */
   expansion: number | null;
   caution?: string;

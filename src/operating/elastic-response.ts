@@ -1,112 +1,48 @@
 import type { ResolvedDesign } from '../design/resolved';
 import {
-  assembleElastic,
   bulgePower,
-  curvatureWeights,
-  elasticPresets,
-  makeElasticMesh,
   peakTensile,
   rodTemperature,
-  rodTemperatureMap,
   solveElastic,
   type PlacedValue,
   type StressField,
 } from '../elastic';
 import { heatSource, solveRod, type RodConduction, type RodField, type RodGrid } from '../heat';
-import { modeSection, stressAlongRod, type ModeSection, type StressAlongRod } from '../lens';
+import { stressAlongRod, type StressAlongRod } from '../lens';
 import { sumOf } from './absorbed';
+import { elasticBase, keyOf, type ElasticBase } from './elastic-base';
+import { answerTo, heldBy, type Column, type HeldColumn } from './elastic-column';
 import type { PumpSpread } from './prepare';
 
 /** Stretches of the doped part whose heat is answered one by one, where its spread along the rod can change. */
 const mostStretches = 8;
 
-/** Stiffness and maps, which depend on the rod alone. */
-interface ElasticBase {
-  key: string;
-  assembled: ReturnType<typeof assembleElastic>;
-  map: ReturnType<typeof rodTemperatureMap>;
-  weights: Float64Array;
-  section: ModeSection;
-}
-
-/** Stress and bulge per watt of heat in one stretch of the rod. */
-interface Column {
-  /** Radial, hoop, axial, shear at node n at 4 n. */
-  stress: Float64Array;
-  along: StressAlongRod;
-  front: number;
-  back: number;
-}
-
 /**
  * Stress and face bulge as linear answers to the heat of each stretch of the rod, solved once per design. Inside a
  * stretch the heat keeps the spread it has at the diode's nominal wavelength. Stress does not depend on the level of
  * the temperature, so base and air temperature do not enter; what the faces lose to the air is part of each answer.
+ * A clamped barrel does feel the level: it was free of force at the temperature of the air, so the answer to a base one kelvin
+ * above the air is added as often as the base is warmer.
  */
 export interface ElasticResponse {
   base: ElasticBase;
   mesh: StressField['mesh'];
   columns: Column[];
+  /** What the mount adds whatever the heat: its pressure, or a base warmer than the rod was clamped at. */
+  held: HeldColumn[];
   /** First axial cell of each stretch, and the end of the last. */
   starts: number[];
 }
 
 export interface ElasticState {
   peakTensile: PlacedValue;
+  /** Greatest radial stress on the barrel, Pa; > 0 where a clamping bore would have to pull. */
+  barrelTension: number;
   /** Integrated along the rod, for the photoelastic path. */
   along: StressAlongRod;
   /** Dioptric power of the bulge of each face, 1/m. */
   front: number;
   back: number;
-}
-
-function elasticBase(resolved: ResolvedDesign, conduction: RodConduction): ElasticBase {
-  const { grid } = conduction;
-  const { rod, cavity, pump } = resolved;
-  const mesh = makeElasticMesh({
-    radius: rod.radius,
-    length: rod.frontCap + rod.dopedLength + rod.backCap,
-    heatedFrom: rod.frontCap,
-    heatedTo: rod.frontCap + rod.dopedLength,
-    pumpRadius: pump.radius,
-    ...elasticPresets.study,
-  });
-  const constants = {
-    youngsModulus: rod.youngModulus,
-    poissonRatio: rod.poissonRatio,
-    expansion: rod.expansionAcross,
-    axialExpansion: rod.expansion,
-  };
-  const assembled = assembleElastic({ constants, referenceTemperature: 0, barrel: { kind: 'free' } }, mesh);
-  return {
-    key: keyOf(resolved, grid),
-    assembled,
-    map: rodTemperatureMap(assembled, conduction),
-    weights: curvatureWeights(mesh, cavity.lensRadius),
-    section: modeSection(mesh.radialNodes, cavity.lensRadius),
-  };
-}
-
-/** What the stiffness, its mesh and its maps depend on. */
-function keyOf({ rod, pump, cavity }: ResolvedDesign, grid: RodGrid): string {
-  const { radius, frontCap, dopedLength, backCap, youngModulus, poissonRatio, expansion, expansionAcross } =
-    rod;
-  const places = [grid.nRadial, ...grid.radialCentres, ...grid.axialCentres];
-  return [
-    radius,
-    frontCap,
-    dopedLength,
-    backCap,
-    youngModulus,
-    poissonRatio,
-    expansion,
-    expansionAcross,
-    pump.radius,
-    cavity.lensRadius,
-    rod.conductivityAxial,
-    rod.faceFilm,
-    ...places,
-  ].join();
 }
 
 function stretches(grid: RodGrid, held: boolean): number[] {
@@ -124,20 +60,7 @@ function columnOf(
 ): Column {
   const source = heatSource(conduction.grid, pump.heatShares, deposit, 1);
   const field = solveRod(conduction, source, { side: 0, front: 0, back: 0 });
-  const solution = solveElastic(base.assembled, rodTemperature(base.map, field));
-  const { radial, hoop, axial, shear } = solution;
-  const stress = new Float64Array(4 * radial.length);
-  for (let n = 0; n < radial.length; n++) {
-    stress[4 * n] = radial[n]!;
-    stress[4 * n + 1] = hoop[n]!;
-    stress[4 * n + 2] = axial[n]!;
-    stress[4 * n + 3] = shear[n]!;
-  }
-  return {
-    stress,
-    along: stressAlongRod(solution),
-    ...bulgePower(solution.displacement, index, base.weights),
-  };
+  return answerTo(base, base.assembled, index, field);
 }
 
 /**
@@ -157,7 +80,8 @@ export function prepareElastic(
   const base =
     like && like.base.key === keyOf(resolved, grid) ? like.base : elasticBase(resolved, conduction);
   // Answers add up only where conduction is linear; otherwise every point is solved by itself.
-  const starts = conduction.law.exponent === 0 ? stretches(grid, held) : [];
+  const linear = conduction.law.exponent === 0;
+  const starts = linear ? stretches(grid, held) : [];
   const columns = starts.slice(1).map((end, k) => {
     const part = new Float64Array(grid.nz);
     const from = starts[k]!;
@@ -165,7 +89,13 @@ export function prepareElastic(
     for (let j = from; j < end; j++) part[j] = total > 0 ? nominal[j]! / total : 1 / (end - from);
     return columnOf(base, resolved.rod.refractiveIndex, conduction, pump, part);
   });
-  return { base, mesh: base.assembled.mesh, columns, starts };
+  return {
+    base,
+    mesh: base.assembled.mesh,
+    columns,
+    held: linear ? heldBy(base, resolved, conduction) : [],
+    starts,
+  };
 }
 
 const emptyAlong = ({ radii }: StressAlongRod): StressAlongRod => ({
@@ -183,11 +113,19 @@ function addAlong(sum: StressAlongRod, weight: number, part: StressAlongRod): vo
   }
 }
 
+function barrelTension({ mesh, radial }: StressField): number {
+  const across = mesh.radialNodes.length;
+  let most = -Infinity;
+  for (let node = across - 1; node < radial.length; node += across) most = Math.max(most, radial[node]!);
+  return most;
+}
+
 /** Stress and bulge of a field solved by itself. */
 function solvedState(base: ElasticBase, index: number, field: RodField): ElasticState {
   const solution = solveElastic(base.assembled, rodTemperature(base.map, field));
   return {
     peakTensile: peakTensile(solution),
+    barrelTension: barrelTension(solution),
     along: stressAlongRod(solution),
     ...bulgePower(solution.displacement, index, base.weights),
   };
@@ -203,22 +141,25 @@ export function elasticState(
   field: RodField,
   heat: Float64Array,
 ): ElasticState {
-  const { base, columns, starts, mesh } = response;
+  const { base, columns, held, starts, mesh } = response;
   if (columns.length === 0) return solvedState(base, index, field);
   const size = columns[0]!.stress.length;
   const sum = new Float64Array(size);
   const along = emptyAlong(columns[0]!.along);
   let front = 0;
   let back = 0;
-  for (let k = 0; k < columns.length; k++) {
-    const { stress, front: ofFront, back: ofBack } = columns[k]!;
-    let weight = 0;
-    for (let j = starts[k]!; j < starts[k + 1]!; j++) weight += heat[j]!;
+  const add = (weight: number, { stress, front: ofFront, back: ofBack, along: part }: Column) => {
     front += weight * ofFront;
     back += weight * ofBack;
-    addAlong(along, weight, columns[k]!.along);
+    addAlong(along, weight, part);
     for (let n = 0; n < size; n++) sum[n] = sum[n]! + weight * stress[n]!;
+  };
+  for (let k = 0; k < columns.length; k++) {
+    let weight = 0;
+    for (let j = starts[k]!; j < starts[k + 1]!; j++) weight += heat[j]!;
+    add(weight, columns[k]!);
   }
+  for (const { column, weight } of held) add(weight(field), column);
   const nodes = size / 4;
   const pick = (offset: number) => {
     const values = new Float64Array(nodes);
@@ -226,5 +167,5 @@ export function elasticState(
     return values;
   };
   const stress = { mesh, radial: pick(0), hoop: pick(1), axial: pick(2), shear: pick(3), surfaceResidual: 0 };
-  return { peakTensile: peakTensile(stress), along, front, back };
+  return { peakTensile: peakTensile(stress), barrelTension: barrelTension(stress), along, front, back };
 }

@@ -28,6 +28,8 @@ export interface SolvedPoint {
   cooler: CoolerState;
   field: RodField;
   lens: RodLens;
+  /** Greatest radial stress on the barrel, Pa; > 0 where a clamping bore would have to pull. */
+  barrelTension: number;
 }
 
 /** The rod's temperatures; where its falling conductivity lets no heat of this size out, those at constant conductivity. */
@@ -229,7 +231,14 @@ export function solvePoint(prepared: PreparedDesign, question: Question, start?:
     },
     ledger,
   };
-  return { point, coolerLimits: [...cooler.limits, ...(separate?.limits ?? [])], cooler, field, lens };
+  return {
+    point,
+    coolerLimits: [...cooler.limits, ...(separate?.limits ?? [])],
+    cooler,
+    field,
+    lens,
+    barrelTension: elastic.barrelTension,
+  };
 }
 
 /** Base temperatures of all stable steady states at one question, K; see `stableBases`. */

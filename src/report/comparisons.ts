@@ -43,13 +43,28 @@ function edgeLens(prepared: PreparedDesign, { lens }: SolvedPoint, edge: Report[
   ];
 }
 
+/** The closed form knows a barrel free of force alone. */
+function stressEstimate(prepared: PreparedDesign, { point }: SolvedPoint): Comparison[] {
+  const { grip, clampingPressure } = prepared.resolved.mount;
+  if (grip === 'clamped' || clampingPressure > 0) return [];
+  return [
+    {
+      name: 'Greatest tensile stress',
+      computed: point.stress.peakTensile,
+      estimate: point.stress.estimate,
+      unit: 'Pa',
+      source: 'Timoshenko & Goodier, Theory of Elasticity: long rod heated like its hottest section',
+    },
+  ];
+}
+
 /** Computed numbers beside their closed-form estimates, so that a person can judge both. */
 export function comparisonsOf(
   prepared: PreparedDesign,
   lasing: SolvedPoint,
   edge: Report['cavityEdge'],
 ): Comparison[] {
-  const { point, lens } = lasing;
+  const { lens } = lasing;
   return [
     ...axisLens(prepared, lasing),
     {
@@ -60,13 +75,7 @@ export function comparisonsOf(
       source:
         'Koechner, Solid-State Laser Engineering: every slice a disc free to bulge (plane stress), an upper bound for long rods',
     },
-    {
-      name: 'Greatest tensile stress',
-      computed: point.stress.peakTensile,
-      estimate: point.stress.estimate,
-      unit: 'Pa',
-      source: 'Timoshenko & Goodier, Theory of Elasticity: long rod heated like its hottest section',
-    },
+    ...stressEstimate(prepared, lasing),
     ...edgeLens(prepared, lasing, edge),
   ];
 }

@@ -112,6 +112,16 @@ function bleachingWarning(prepared: PreparedDesign, { point }: SolvedPoint): War
   ];
 }
 
+/** A pull of the bore beyond this is more than rounding or a trifle, Pa. */
+const noticedPull = 1e5;
+
+/** A rod colder than it was when clamped shrinks away from its bore, which the model does not let go. */
+function pullWarning({ mount }: ResolvedDesign, { barrelTension }: SolvedPoint): Warning[] {
+  if (mount.grip !== 'clamped' || barrelTension < noticedPull) return [];
+  const text = `The clamping bore would have to pull the rod by up to ${(barrelTension / 1e6).toPrecision(2)} MPa, since the barrel is colder there than at assembly: unless it is bonded it comes loose, and loses its contact.`;
+  return [{ where: 'mount.grip', text }];
+}
+
 /** What a person should know beside the numbers of the design's operating point. */
 export function pointWarnings(prepared: PreparedDesign, lasing: SolvedPoint): Warning[] {
   const { resolved, grid } = prepared;
@@ -131,6 +141,7 @@ export function pointWarnings(prepared: PreparedDesign, lasing: SolvedPoint): Wa
     ...clippingWarnings(pump.profile, Math.max(...beamRadii(grid.axialFaces, beam)), rod.radius),
     ...bleachingWarning(prepared, lasing),
     ...stressLensWarning(resolved, lasing),
+    ...pullWarning(resolved, lasing),
     ...signWarning(prepared, lasing),
     ...polarisationRemark(prepared, lasing),
     ...cooler.warnings,

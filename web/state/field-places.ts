@@ -41,7 +41,9 @@ export function isIdle(field: Field, value: (path: string) => unknown): boolean 
   const shape = value('rod.section.shape');
   if (field.path === 'rod.section.diameter') return shape !== 'round';
   if (field.path === 'rod.section.side') return shape !== 'square';
-  if (field.path === 'mount.material') return value('mount.shape.kind') === 'none';
+  if (field.path === 'mount.clampingPressure') return value('mount.grip') === 'clamped';
+  if (field.path === 'mount.material' || field.path === 'mount.grip')
+    return value('mount.shape.kind') === 'none';
   if (field.path === 'pump.profileOrder') return value('pump.profile') !== 'super-gaussian';
   if (field.path === 'pump.returnReflectivity') return value('pump.passes') === 1;
   return false;
