@@ -1,6 +1,7 @@
+import type { Warning } from '../errors';
 import type { Crystal } from '../materials';
 import type { BeamProfile } from '../pump';
-import { measuredProfile } from './measured-profile';
+import { measuredProfile, stretchWarning } from './measured-profile';
 import { valueOf } from './quantity-field';
 import type { ResolvedDiode, ResolvedPump } from './resolved';
 import type { Design } from './schema';
@@ -52,6 +53,16 @@ export function resolvePump(design: Design, crystal: Crystal): ResolvedPump {
     returnReflectivity: valueOf(pump.returnReflectivity, 'dimensionless'),
     entranceTransmission: valueOf(pump.entranceTransmission, 'dimensionless'),
   };
+}
+
+/** What a person should know of the way the light enters. */
+export function pumpWarnings(design: Design, { profile, passes, backShare }: ResolvedPump): Warning[] {
+  const text =
+    'A second pass in a rod pumped from both ends asks of each face that it lets one beam in and sends the other back, as only beams of two polarisations or wavelengths allow; both are computed as sent back.';
+  return [
+    ...stretchWarning(design, profile),
+    ...(passes === 2 && backShare > 0 && backShare < 1 ? [{ where: 'pump.backShare', text }] : []),
+  ];
 }
 
 /** The diode of a design in SI. */

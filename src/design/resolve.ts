@@ -2,13 +2,12 @@ import type { Surroundings } from '../cooling';
 import { DesignError, type Warning } from '../errors';
 import type { Limits } from './bounds';
 import type { Overrides } from './constants';
-import { stretchWarning } from './measured-profile';
 import { valueOf } from './quantity-field';
 import { resolveCavity } from './resolve-cavity';
 import { chooseConstants } from './resolve-constants';
 import { resolveCoolers } from './resolve-coolers';
 import { resolveMount } from './resolve-mount';
-import { resolveDiode, resolvePump } from './resolve-pump';
+import { pumpWarnings, resolveDiode, resolvePump } from './resolve-pump';
 import { resolveRod } from './resolve-rod';
 import type { ResolvedDesign } from './resolved';
 import type { Design } from './schema';
@@ -90,6 +89,6 @@ export function resolve(design: Design, overrides: Overrides = {}): ResolvedDesi
     cavity: resolveCavity(design, pump.radius),
     limits,
     constants: choice.used,
-    warnings: [...ofRod, ...ofMount, ...stretchWarning(design, pump.profile), ...ofRoom],
+    warnings: [...ofRod, ...ofMount, ...pumpWarnings(design, pump), ...ofRoom],
   };
 }

@@ -48,6 +48,14 @@ describe('Pumping from both ends', () => {
     expect(both.point.stress.peakTensile).toBeLessThan(0.6 * front.point.stress.peakTensile);
   });
 
+  it('asks of the faces what coatings hardly give, where the light passes twice', () => {
+    const warned = (passes: number, share: string) =>
+      at(share, { 'pump.passes': passes }).bench.prepared.resolved.warnings.map(({ where }) => where);
+    expect(warned(2, '50 %')).toContain('pump.backShare');
+    expect(warned(1, '50 %')).not.toContain('pump.backShare');
+    expect(warned(2, '0 %')).not.toContain('pump.backShare');
+  });
+
   it('leaves the lens as it is: it asks for the heat, not where along the rod it lies', () => {
     const insulated = { 'rod.faceFilm': '0 W/(m^2 K)', 'rod.values.expansion': '0 1/K' };
     const [one, two] = ['0 %', '50 %'].map((share) => at(share, insulated).point.lens.dioptricPower);

@@ -3,6 +3,7 @@ import { resolve } from '../../src/design/resolve';
 import { blockResistance } from '../../src/heat';
 import { compareMounts } from '../../src/study/mounts';
 import { picturesOf } from '../../src/report/pictures';
+import { imbalanceOf } from '../trials/ledger';
 import { benchOf, changed, trial } from '../trials/trial';
 
 const held = {
@@ -109,6 +110,27 @@ describe('Without a mount', () => {
     const { constants } = bare.bench.prepared.resolved;
     expect(constants.map(({ path }) => path)).not.toContain('mount.thermalConductivity');
     expect(bare.point.ledger.map(({ to }) => to)).toContain('barrel');
+  });
+
+  it.each([
+    ['none', { 'mount.shape': { kind: 'none' } }],
+    ['a block', { 'mount.shape': block }],
+    ['both ends pumped', { 'pump.backShare': '40 %' }],
+    [
+      'a measured profile wider than the rod',
+      {
+        'pump.radius': '1.2 mm',
+        'pump.profile': 'table',
+        'pump.profileTable': [
+          ['0 mm', 1],
+          ['1 mm', 0.8],
+          ['2 mm', 0],
+        ],
+      },
+    ],
+  ])('with %s every watt is still accounted for', (_, changes) => {
+    const { point } = pointWith({ ...changes, 'rod.faceFilm': '500 W/(m^2 K)' });
+    expect(imbalanceOf(point.ledger)).toBeLessThan(1e-9 * point.electricalPower);
   });
 
   it('the picture ends at the barrel; a block is drawn as the ring it is computed as', () => {

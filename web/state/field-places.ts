@@ -11,6 +11,7 @@ export type FieldPlace =
   | 'rod'
   | 'constants'
   | 'mount'
+  | 'grip'
   | 'cooler'
   | 'cavity'
   | 'element'
@@ -25,6 +26,7 @@ const rules: [RegExp, FieldPlace][] = [
   [/^surroundings\./, 'surroundings'],
   [/^rod\.values\./, 'constants'],
   [/^rod\./, 'rod'],
+  [/^mount\.(grip|clampingPressure)$/, 'grip'],
   [/^mount\./, 'mount'],
   [/^coolers\./, 'cooler'],
   [/^cavity\.elements\./, 'element'],
