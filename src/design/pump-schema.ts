@@ -157,7 +157,7 @@ const beamSchema = {
     }),
   ),
   waistPosition: v.optional(
-    length('Waist position', -100, 500, 'From the pumped face; positive lies inside the rod'),
+    length('Waist position', -100, 500, 'From the face the light enters by; positive lies inside the rod'),
     '0 mm',
   ),
 };

@@ -12,7 +12,7 @@ import { stressAlongRod, type StressAlongRod } from '../lens';
 import { sumOf } from './absorbed';
 import { elasticBase, keyOf, type ElasticBase } from './elastic-base';
 import { answerTo, heldBy, type Column, type HeldColumn } from './elastic-column';
-import type { PumpSpread } from './prepare';
+import type { PumpSpread } from './pump-spread';
 
 /** Stretches of the doped part whose heat is answered one by one, where its spread along the rod can change. */
 const mostStretches = 8;

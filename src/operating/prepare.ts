@@ -11,33 +11,22 @@ import {
   type RodHeatModel,
   type SideModel,
 } from '../heat';
-import { combineRings, overlapFaces } from '../laser';
+import { combineRings } from '../laser';
 import {
-  beamRadii,
   beamRadius,
   caseWindow,
   channelsAt,
   prepareAbsorption,
-  ringShares,
   type CaseWindow,
   type FocusedBeam,
 } from '../pump';
 import { DepositTable } from './deposit-table';
 import { prepareElastic, type ElasticResponse } from './elastic-response';
+import { spreadOf, type PumpSpread } from './pump-spread';
 import { prepareLens, type PreparedLens } from './rod-lens';
 
 /** Case temperatures over which the diode's window is sought, K. */
 const caseSearch = { from: 253.15, to: 373.15 };
-
-/** How the absorbed heat spreads over radius, on rings of the heat grid and on finer ones for the overlap with the mode. */
-export interface PumpSpread {
-  /** Ring i of axial cell j at j * nr + i (one row where the beam is collimated). */
-  heatShares: Float64Array;
-  overlapFaces: Float64Array;
-  overlapShares: Float64Array;
-  /** Share of the light that passes outside the rod. */
-  clipped: number;
-}
 
 /** Heat that reaches the base, by reciprocity: share of the heat of each axial cell, and base-to-air conductance. */
 export interface BaseHeat {
@@ -91,32 +80,6 @@ function heatModel({ rod, mount }: ResolvedDesign): RodHeatModel {
     side: sideOf(mount),
     front: end,
     back: end,
-  };
-}
-
-/** Scales the shares of one plane to a given sum. */
-function evenOut(row: Float64Array, total: number): void {
-  const sum = row.reduce((all, share) => all + share, 0);
-  if (sum > 0 && sum !== total) for (let i = 0; i < row.length; i++) row[i] = (row[i]! * total) / sum;
-}
-
-function spreadOf(resolved: ResolvedDesign, grid: RodGrid, beam: FocusedBeam): PumpSpread {
-  const { pump, rod } = resolved;
-  const radii = pump.beamQuality === null ? pump.radius : beamRadii(grid.axialFaces, beam);
-  const finer = overlapFaces(pump.profile, radii, rod.radius, 16);
-  const heatShares = ringShares(pump.profile, grid.radialFaces, radii);
-  const middle = (grid.dopedFrom + grid.dopedTo) >> 1;
-  const row =
-    heatShares.length > grid.nr ? heatShares.subarray(middle * grid.nr, (middle + 1) * grid.nr) : heatShares;
-  const inside = row.reduce((sum, share) => sum + share, 0);
-  // A diverging beam is clipped once, not anew in every plane: all rows carry the light of the middle one.
-  for (let from = 0; from < heatShares.length; from += grid.nr)
-    evenOut(heatShares.subarray(from, from + grid.nr), inside);
-  return {
-    heatShares,
-    overlapFaces: finer,
-    overlapShares: ringShares(pump.profile, finer, radii),
-    clipped: 1 - inside,
   };
 }
 
@@ -200,7 +163,7 @@ export function prepareDesign(
   });
   const linear = assembleRod({ ...model, conductivityExponent: 0 }, grid);
   const conduction = rod.conductivityExponent === 0 ? linear : assembleRod(model, grid);
-  const spread = spreadOf(resolved, grid, beam);
+  const spread = spreadOf(resolved, grid, beam, absorption);
   const drifts = rod.absorption.kind !== 'coefficient';
   const deposits = new DepositTable(resolved, grid, absorption);
   return {

@@ -30,6 +30,20 @@ describe('Pumping from both ends', () => {
     expect(back.point.stress.position.z).toBeCloseTo(10e-3 - front.point.stress.position.z, 9);
   });
 
+  it('of a diverging beam is the mirror image too: its waist lies as far inside the back face', () => {
+    const focus = { 'pump.beamQuality': 120, 'pump.waistPosition': '1 mm' };
+    const [one, other] = ['0 %', '100 %'].map((share) => at(share, focus).point) as [
+      typeof front.point,
+      typeof front.point,
+    ];
+    expect(other.lens.dioptricPower / one.lens.dioptricPower).toBeCloseTo(1, 3);
+    // Grids that are finer at either end: a tenth of a per cent of a rise of 90 K.
+    expect(Math.abs(other.rod.peakTemperature - one.rod.peakTemperature)).toBeLessThan(0.1);
+    // Half and half: the lens is the mean of the two, which are alike.
+    const both = at('50 %', focus).point;
+    expect(both.lens.thermoOptic / one.lens.thermoOptic).toBeCloseTo(1, 3);
+  });
+
   it('halves the heat at each face: with faces that far apart the peak rise is the mean of near and far end', () => {
     const axis = (solved: typeof front, z: number) => {
       const { grid, temperatures } = solved.field;
