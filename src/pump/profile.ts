@@ -23,26 +23,44 @@ function pieceIntegral(r0: number, i0: number, slope: number, r: number): number
   return ((i0 - slope * r0) * (r * r - r0 * r0)) / 2 + (slope * (r * r * r - r0 * r0 * r0)) / 3;
 }
 
-/** Power inside r over 2 pi, in the table's own units. */
-function tablePower(radii: ArrayLike<number>, intensities: ArrayLike<number>, r: number): number {
-  const first = Math.min(r, radii[0]!);
-  let power = (intensities[0]! * first * first) / 2;
-  for (let k = 0; k + 1 < radii.length && radii[k]! < r; k++) {
-    const r0 = radii[k]!;
-    const r1 = radii[k + 1]!;
-    if (!(r1 > r0)) continue;
-    const slope = (intensities[k + 1]! - intensities[k]!) / (r1 - r0);
-    power += pieceIntegral(r0, intensities[k]!, slope, Math.min(r, r1));
-  }
+/** Power over 2 pi inside each radius of a table, in its own units; summed once, since a design asks thousands of times. */
+const sums = new WeakMap<object, Float64Array>();
+
+function powerAtPoints(profile: BeamProfile & { kind: 'table' }): Float64Array {
+  const known = sums.get(profile);
+  if (known) return known;
+  const { radii, intensities } = profile;
+  const power = new Float64Array(radii.length);
+  power[0] = (intensities[0]! * radii[0]! * radii[0]!) / 2;
+  for (let k = 1; k < power.length; k++) power[k] = power[k - 1]! + beyondPoint(profile, k - 1, radii[k]!);
+  sums.set(profile, power);
   return power;
+}
+
+/** Power over 2 pi between point k and a radius of the piece behind it. */
+function beyondPoint({ radii, intensities }: BeamProfile & { kind: 'table' }, k: number, r: number): number {
+  const r0 = radii[k]!;
+  const width = radii[k + 1]! - r0;
+  if (!(width > 0)) return 0;
+  return pieceIntegral(r0, intensities[k]!, (intensities[k + 1]! - intensities[k]!) / width, r);
 }
 
 function tableShare(profile: BeamProfile & { kind: 'table' }, radius: number, r: number): number {
   const { radii, intensities, measuredRadius } = profile;
-  const last = radii[radii.length - 1]!;
+  const last = radii.length - 1;
   const scaled = measuredRadius === undefined ? r : (r * measuredRadius) / radius;
-  const total = tablePower(radii, intensities, last);
-  return scaled >= last || !(total > 0) ? 1 : tablePower(radii, intensities, scaled) / total;
+  const power = powerAtPoints(profile);
+  const total = power[last]!;
+  if (scaled >= radii[last]! || !(total > 0)) return 1;
+  if (scaled <= radii[0]!) return (intensities[0]! * scaled * scaled) / 2 / total;
+  let low = 0;
+  let high = last;
+  while (high - low > 1) {
+    const middle = (low + high) >> 1;
+    if (radii[middle]! <= scaled) low = middle;
+    else high = middle;
+  }
+  return (power[low]! + beyondPoint(profile, low, scaled)) / total;
 }
 
 /**
