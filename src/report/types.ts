@@ -1,17 +1,15 @@
+import type { Constant } from '../design/resolved';
 import type { Warning } from '../errors';
 import type { LimitName, Margin } from '../limits/types';
 import type { OperatingPoint as OperatingReport } from '../operating/types';
+import type { MountComparison } from '../study/mounts';
 import type { Contributor, SweepPoint } from '../study/types';
 
+export type { Constant } from '../design/resolved';
 export type { LimitName, Margin } from '../limits/types';
 export type { Flow, OperatingPoint as OperatingReport, PlaneReport, Position } from '../operating/types';
+export type { MountComparison } from '../study/mounts';
 export type { Contributor, SweepPoint } from '../study/types';
-
-/** A nominal value with the ends the uncertain inputs give it; the ends are null until they are computed. */
-export interface Banded {
-  low: number | null;
-  high: number | null;
-}
 
 export interface OptionReport {
   id: string;
@@ -36,37 +34,6 @@ export interface OptionReport {
   windows: { fromPumpPower: number; toPumpPower: number }[];
   /** Where each limit is first broken, ascending; null if it holds throughout. */
   limits: { limit: LimitName; pumpPower: number | null }[];
-}
-
-export interface MountReport {
-  material: string;
-  ceiling: number | null;
-  setBy: LimitName | null;
-  peakTemperature: number;
-  dioptricPower: number;
-  /** Mount minus rod expansion across the rod, 1/K; null where the expansion is unknown. */
-  expansionMismatch: number | null;
-  /** kg, as long as the rod; 0 without a mount. */
-  mass: number;
-  /** W/(m K); null where there is no mount. */
-  thermalConductivity: number | null;
-  caution?: string;
-  current: boolean;
-}
-
-/** A constant the answer rests on, with where it comes from. */
-export interface ConstantUsed {
-  path: string;
-  label: string;
-  nominal: number;
-  low: number | null;
-  high: number | null;
-  unit: string;
-  /** Full citation, or who entered it. */
-  source: string;
-  /** "read" in the source, "from memory", or "own" where the person entered it. */
-  standing: 'read' | 'from memory' | 'own' | 'common practice';
-  note?: string;
 }
 
 /** A computed number beside its closed-form estimate. */
@@ -100,7 +67,7 @@ export interface Report {
     zones: Record<'sagittal' | 'tangential', { from: number; to: number }[]>;
   };
   usableWindow: { fromPumpPower: number; toPumpPower: number }[];
-  mounts: MountReport[];
+  mounts: MountComparison[];
   levers: { path: string; label: string; change: string; effect: number }[];
   /** Contributors to the band of the chosen option's ceiling and of the cavity edge, largest first. */
   contributors: { ceiling: Contributor[]; cavityEdge: Contributor[] };
@@ -108,7 +75,7 @@ export interface Report {
   comparisons: Comparison[];
   /** Estimated error of the grid at the operating point, 1/m, K and Pa; null until it is computed. */
   accuracy: { dioptricPower: number; peakTemperature: number; peakTensile: number } | null;
-  constants: ConstantUsed[];
+  constants: Constant[];
   cautions: string[];
   /** Pump power up to which ceilings were searched. */
   searchedTo: number;

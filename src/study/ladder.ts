@@ -11,12 +11,6 @@ export interface LadderStep extends Interval {
   option: string | null;
 }
 
-/** How much a way of cooling asks of a laboratory: fins, a fan, water, then a TEC on each of them. */
-export function demandOf(kind: string, hotSideKind?: string): number {
-  const plain: Record<string, number> = { resistance: 0, passive: 0, fan: 1, liquid: 2 };
-  return kind === 'tec' ? 3 + (plain[hotSideKind ?? 'passive'] ?? 0) : (plain[kind] ?? 9);
-}
-
 /**
  * The cooling ladder: along the pump-power axis, the least demanding way of cooling that keeps every limit.
  * @param rungs options with the powers over which each holds, W

@@ -25,7 +25,7 @@ export interface MountComparison {
   setBy: LimitName | null;
   peakTemperature: number;
   dioptricPower: number;
-  /** Mount minus rod, across the rod, 1/K. */
+  /** Mount minus rod, across the rod, 1/K; null where the expansion is unknown. */
   expansionMismatch: number | null;
   /** Of a mount as long as the rod, kg; 0 without one. */
   mass: number;

@@ -1,8 +1,10 @@
 import { describe, expect, it } from 'vitest';
+import { checkDesign } from '../../src/design/check';
+import { demoDesign } from '../../src/design/demo';
 import { resolve } from '../../src/design/resolve';
 import { prepareDesign } from '../../src/operating/prepare';
 import { edgeOf } from '../../src/report/answer';
-import { demandOf, ladderOf } from '../../src/study/ladder';
+import { ladderOf } from '../../src/study/ladder';
 import { OptionBench } from '../../src/study/option-bench';
 import { randomDesign, seeded } from '../trials/random-designs';
 
@@ -104,9 +106,9 @@ describe.each(designs)('The cavity edge of random design $seed', ({ to, chosen, 
 describe('The ladder', () => {
   it('takes the least demanding option wherever several hold, and says where none does', () => {
     const rungs = [
-      { id: 'TEC', demand: demandOf('tec', 'fan'), windows: [{ from: 0, to: 30 }] },
-      { id: 'fins', demand: demandOf('passive'), windows: [{ from: 2, to: 10 }] },
-      { id: 'fan', demand: demandOf('fan'), windows: [{ from: 1, to: 20 }] },
+      { id: 'TEC', demand: 4, windows: [{ from: 0, to: 30 }] },
+      { id: 'fins', demand: 0, windows: [{ from: 2, to: 10 }] },
+      { id: 'fan', demand: 1, windows: [{ from: 1, to: 20 }] },
     ];
     expect(ladderOf(rungs, 40)).toEqual([
       { from: 0, to: 1, option: 'TEC' },
@@ -118,15 +120,14 @@ describe('The ladder', () => {
     ]);
   });
 
-  it('ranks fins before a fan, a fan before water, and any of them before a TEC on it', () => {
-    const demands = [
-      demandOf('passive'),
-      demandOf('fan'),
-      demandOf('liquid'),
-      demandOf('tec', 'passive'),
-      demandOf('tec', 'fan'),
-      demandOf('tec', 'liquid'),
-    ];
-    expect([...demands].sort((a, b) => a - b)).toEqual(demands);
+  it('ranks fins before a fan, a fan before water, and each of them before a TEC on it', () => {
+    const checked = checkDesign(demoDesign);
+    if (!checked.ok) throw new Error('the demo design is refused');
+    const demands = new Map(resolve(checked.design).coolers.map(({ id, demand }) => [id, demand]));
+    const ranked = ['fins', 'fan', 'water', 'TEC on fins', 'TEC on fan', 'TEC on water'].map((id) =>
+      demands.get(id)!,
+    );
+    expect([...ranked].sort((a, b) => a - b)).toEqual(ranked);
+    expect(new Set(ranked).size).toBe(ranked.length);
   });
 });

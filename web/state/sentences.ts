@@ -1,4 +1,4 @@
-import type { MountReport, Report } from '../../src/report/types';
+import type { MountComparison, Report } from '../../src/report/types';
 import { band, lensPower, length, power, rise, temperature } from '../format/quantities';
 import { percent } from '../format/number';
 
@@ -48,7 +48,7 @@ export function rodSentence(report: Report): string {
 
 const spreadOf = (values: number[]) => Math.max(...values) - Math.min(...values);
 
-export function mountSentence(mounts: MountReport[]): string {
+export function mountSentence(mounts: MountComparison[]): string {
   if (mounts.length === 1 && mounts[0]!.thermalConductivity === null)
     return 'None conducts here: the barrel itself is cooled, and the contact to it is all that lies between rod and base.';
   if (mounts.length < 2) return 'No other material was compared.';
