@@ -153,7 +153,7 @@ test('parts of the cavity and coolers can be added and taken away, and undone', 
   await expect(page.getByRole('textbox', { name: 'Focal length' })).toHaveValue('200 mm');
   await page.getByRole('button', { name: 'Undo add lens' }).click();
   await expect(page.getByRole('textbox', { name: 'Focal length' })).toHaveCount(0);
-  await page.getByText('ways of cooling, their sizes').click();
+  await page.getByText('ways of cooling, sizes and supplies').click();
   await page.getByRole('button', { name: 'plain K/W' }).click();
   await expect(page.getByRole('group', { name: /Ceiling of every way/ }).locator('.word.main')).toHaveCount(
     7,
